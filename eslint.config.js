@@ -33,7 +33,7 @@ export default tseslint.config(
   { files: ['src/**'], ...hooks.configs.flat['recommended-latest'] },
   room(['analytics/**'], SERVER, CLIENT, SHARED, ['^(pg|drizzle-orm|express|react)', 'pure functions only']),
   room(['shared/**'], SERVER, CLIENT, ANALYTICS, ['^(?!\\.|zod$)', 'shared imports zod alone']),
-  room(['server/**'], CLIENT, ['resources/[^/]+/queries$', 'no resource reaches into another’s queries']),
+  room(['server/**'], CLIENT, ['^\\.\\./[a-z-]+/queries$', 'no resource reaches into another’s queries']),
   room(
     ['src/components/**', 'src/lib/**'],
     SERVER,
