@@ -1,0 +1,14 @@
+import { sql } from 'drizzle-orm';
+import type { Database, Transaction } from './client';
+
+/** Runs one use case of one shop in one transaction; row-level security shows it that shop alone. */
+export function withShop<Result>(
+  database: Database,
+  shopId: string,
+  work: (tx: Transaction) => Promise<Result>,
+): Promise<Result> {
+  return database.transaction(async (tx) => {
+    await tx.execute(sql`SELECT set_config('app.shop_id', ${shopId}, true)`);
+    return work(tx);
+  });
+}
