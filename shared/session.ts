@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { id, instant } from './basics';
 import { ROLES } from './roles';
 
-export const email = z.string().trim().toLowerCase().pipe(z.email('This is not an e-mail address.')).max(254);
+export const email = z.string().trim().toLowerCase().max(254).pipe(z.email('This is not an e-mail address.'));
 export const newPassword = z
   .string()
   .min(12, 'Use at least 12 characters.')

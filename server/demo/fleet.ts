@@ -57,22 +57,28 @@ function pickInServiceDay(random: Random, plan: FleetPlan): number {
 const nearOne = (random: Random): number =>
   (random.exponential(1) + random.exponential(1) + random.exponential(1) + random.exponential(1)) / 4;
 
-function createUnit(random: Random, plan: FleetPlan, index: number, customers: Customer[]): Unit {
+type CustomerBook = Record<UseClass, Customer[]>;
+
+/** Outfits own several machines, households mostly one. */
+function pickCustomer(random: Random, book: CustomerBook, index: number, useClass: UseClass): Customer {
+  const known = book[useClass];
+  if (known.length > 0 && random.chance(useClass === 'homeowner' ? 0.15 : 0.75)) return random.pick(known);
+  const customer = createCustomer(random, index, useClass);
+  known.push(customer);
+  return customer;
+}
+
+function createUnit(random: Random, plan: FleetPlan, index: number, book: CustomerBook): Unit {
   const model = random.weighted(plan.models.map((entry) => [entry, entry.weight] as const));
   const useClass = pickUseClass(random, model);
   const inServiceDay = pickInServiceDay(random, plan);
   const inRegister = index < plan.registered;
   const plateGone = random.chance(plan.plateGone) || (!inRegister && random.chance(0.5));
-  const returning = useClass === 'homeowner' ? 0.15 : 0.7;
-  const known = customers.filter((_, at) => at % 5 === index % 5);
-  const customer =
-    known.length > 0 && random.chance(returning) ? undefined : createCustomer(random, index, useClass);
-  if (customer) customers.push(customer);
   return {
     index,
     model,
     useClass,
-    customer: customer ?? random.pick(known),
+    customer: pickCustomer(random, book, index, useClass),
     location: random.chance(0.68) ? LOCATIONS[0] : LOCATIONS[1],
     serial: plateGone
       ? ''
@@ -90,7 +96,7 @@ function createUnit(random: Random, plan: FleetPlan, index: number, customers: C
 }
 
 export function createFleet(random: Random, plan: FleetPlan): Unit[] {
-  const customers: Customer[] = [];
+  const book: CustomerBook = { homeowner: [], commercial: [], rental: [], municipal: [] };
   return Array.from({ length: plan.registered + plan.walkIns }, (_, index) =>
     createUnit(random, plan, index, customers),
   );
