@@ -9,7 +9,7 @@ export type JobPayloads = {
 };
 export type JobName = keyof JobPayloads;
 
-export const JOB_NAMES: readonly JobName[] = ['import', 'analysis', 'mail'];
+export const JOB_NAMES = ['import', 'analysis', 'mail'] as const satisfies readonly JobName[];
 const SCHEMA = 'jobs';
 
 const options = { schema: SCHEMA, application_name: 'witness-mark-jobs' } as const;
