@@ -98,6 +98,6 @@ function createUnit(random: Random, plan: FleetPlan, index: number, book: Custom
 export function createFleet(random: Random, plan: FleetPlan): Unit[] {
   const book: CustomerBook = { homeowner: [], commercial: [], rental: [], municipal: [] };
   return Array.from({ length: plan.registered + plan.walkIns }, (_, index) =>
-    createUnit(random, plan, index, customers),
+    createUnit(random, plan, index, book),
   );
 }

@@ -3,14 +3,47 @@ import type { Trouble } from './phrases';
 /** Words for troubles of fuel, engine, deck, drive and chassis. */
 export const MACHINE_TROUBLES: Readonly<Record<string, Trouble>> = {
   Carburetor: {
-    complaints: ['wont start', 'surging', 'runs only on choke', 'gas running out of carb', 'starts then dies', 'no power, blubbering', 'leaks gas when parked'],
-    causes: ['carb varnished', 'main jet plugged', 'needle and seat leaking', 'old fuel, bowl full of water', 'pilot circuit plugged', 'float sunk'],
-    fixes: ['new carb, fresh fuel, 3550 rpm no load', 'replaced carburetor', 'R&R carb, new gaskets, set governed speed'],
-    cures: ['cleaned carb, fresh gas, runs good', 'carb cleaned and jets blown out', 'drained old fuel, cleaned bowl, runs'],
+    complaints: [
+      'wont start',
+      'surging',
+      'runs only on choke',
+      'gas running out of carb',
+      'starts then dies',
+      'no power, blubbering',
+      'leaks gas when parked',
+    ],
+    causes: [
+      'carb varnished',
+      'main jet plugged',
+      'needle and seat leaking',
+      'old fuel, bowl full of water',
+      'pilot circuit plugged',
+      'float sunk',
+    ],
+    fixes: [
+      'new carb, fresh fuel, 3550 rpm no load',
+      'replaced carburetor',
+      'R&R carb, new gaskets, set governed speed',
+    ],
+    cures: [
+      'cleaned carb, fresh gas, runs good',
+      'carb cleaned and jets blown out',
+      'drained old fuel, cleaned bowl, runs',
+    ],
   },
   'Fuel pump': {
-    complaints: ['dies after 10 min like out of gas', 'starves going uphill', 'wont pull fuel', 'runs out of gas with full tank'],
-    causes: ['pump diaphragm torn', 'no pulse flow, 0 output', 'fuel pump weak, line ok', 'pump cracked, sucking air'],
+    complaints: [
+      'dies after 10 min like out of gas',
+      'starves going uphill',
+      'wont pull fuel',
+      'runs out of gas with full tank',
+    ],
+    causes: [
+      'pump diaphragm torn',
+      'no pulse flow, 0 output',
+      'fuel pump weak, line ok',
+      'pump cracked, sucking air',
+    ],
     fixes: ['new fuel pump', 'replaced pump, checked oil for gas', 'R&R fuel pump and clamps'],
   },
   'Fuel filter': {
@@ -24,14 +57,47 @@ export const MACHINE_TROUBLES: Readonly<Record<string, Trouble>> = {
     fixes: ['new fuel line and clamps', 'replaced line tank to filter', 'cut and replaced hose, no leaks'],
   },
   'Deck belt': {
-    complaints: ['belt broke', 'throws belt', 'squealing from deck', 'deck quit turning', 'burnt rubber smell', 'blades slow in thick grass'],
-    causes: ['deck belt broke', 'belt glazed and stretched', 'belt rolled over, cords showing', 'belt burnt one spot'],
-    fixes: ['new deck belt', 'replaced deck belt, cleared grass from covers', 'R&R deck belt, idlers spin free', 'installed belt, set tension'],
+    complaints: [
+      'belt broke',
+      'throws belt',
+      'squealing from deck',
+      'deck quit turning',
+      'burnt rubber smell',
+      'blades slow in thick grass',
+    ],
+    causes: [
+      'deck belt broke',
+      'belt glazed and stretched',
+      'belt rolled over, cords showing',
+      'belt burnt one spot',
+    ],
+    fixes: [
+      'new deck belt',
+      'replaced deck belt, cleared grass from covers',
+      'R&R deck belt, idlers spin free',
+      'installed belt, set tension',
+    ],
   },
   'Spindle bearing': {
-    complaints: ['deck howls', 'grinding from deck', 'squeals and throws belt', 'blade wobbles', 'deck vibrates bad', 'smokes at left spindle'],
-    causes: ['center spindle bearing seized, took the belt', 'LH spindle brg rough, drags by hand', 'spindle bearing rusted, grass packed', 'RH spindle play 1/8 in'],
-    fixes: ['new spindle bearings, all spin free', 'replaced LH spindle brgs, greased', 'R&R bearings center spindle, belt line checked'],
+    complaints: [
+      'deck howls',
+      'grinding from deck',
+      'squeals and throws belt',
+      'blade wobbles',
+      'deck vibrates bad',
+      'smokes at left spindle',
+    ],
+    causes: [
+      'center spindle bearing seized, took the belt',
+      'LH spindle brg rough, drags by hand',
+      'spindle bearing rusted, grass packed',
+      'RH spindle play 1/8 in',
+    ],
+    fixes: [
+      'new spindle bearings, all spin free',
+      'replaced LH spindle brgs, greased',
+      'R&R bearings center spindle, belt line checked',
+    ],
   },
   'Blade set': {
     complaints: ['cuts ragged', 'leaves strips', 'uneven cut', 'vibrates when blades on'],
@@ -50,18 +116,50 @@ export const MACHINE_TROUBLES: Readonly<Record<string, Trouble>> = {
     fixes: ['new trimmer head', 'replaced head, loaded line'],
   },
   'Drive belt': {
-    complaints: ['wont pull', 'no drive', 'slow uphill', 'belt smell, wont move', 'quit moving', 'jerks when starting out'],
-    causes: ['drive belt broke', 'traction belt glazed', 'belt stretched, idler at end of slot', 'belt off and chewed'],
-    fixes: ['new drive belt', 'replaced traction belt', 'R&R drive belt, guides checked', 'belt installed, drives good'],
+    complaints: [
+      'wont pull',
+      'no drive',
+      'slow uphill',
+      'belt smell, wont move',
+      'quit moving',
+      'jerks when starting out',
+    ],
+    causes: [
+      'drive belt broke',
+      'traction belt glazed',
+      'belt stretched, idler at end of slot',
+      'belt off and chewed',
+    ],
+    fixes: [
+      'new drive belt',
+      'replaced traction belt',
+      'R&R drive belt, guides checked',
+      'belt installed, drives good',
+    ],
   },
   'Drive idler pulley': {
-    complaints: ['throws drive belt', 'squeal when moving', 'eats drive belts', 'whine from under seat, wont pull'],
-    causes: ['drive idler seized, cut the belt', 'idler arm pulley loose on bearing', 'idler bearing out, belt runs off', 'V idler worn sharp'],
+    complaints: [
+      'throws drive belt',
+      'squeal when moving',
+      'eats drive belts',
+      'whine from under seat, wont pull',
+    ],
+    causes: [
+      'drive idler seized, cut the belt',
+      'idler arm pulley loose on bearing',
+      'idler bearing out, belt runs off',
+      'V idler worn sharp',
+    ],
     fixes: ['new drive idler', 'replaced idler pulley, belt runs true', 'R&R V idler and bolt'],
   },
   'Hydro pump': {
     complaints: ['weak drive when hot', 'pulls to left', 'wont climb', 'whines, slow on left side'],
-    causes: ['LH pump weak hot, fan ok', 'pump shaft seal leaking', 'low output, oil burnt', 'pump internal wear'],
+    causes: [
+      'LH pump weak hot, fan ok',
+      'pump shaft seal leaking',
+      'low output, oil burnt',
+      'pump internal wear',
+    ],
     fixes: ['replaced hydro pump, purged', 'new pump LH, oil and filter', 'R&R pump, drives straight'],
     cures: ['adjusted tracking and neutral', 'purged air, adjusted linkage, tracks straight'],
   },
@@ -100,7 +198,11 @@ export const MACHINE_TROUBLES: Readonly<Record<string, Trouble>> = {
   'Head gasket': {
     complaints: ['smokes', 'no power, oil blowing out', 'loud puffing', 'low power hot'],
     causes: ['head gasket blown between bores', 'leakdown 45 pct at gasket', 'head warped .006'],
-    fixes: ['new head gasket, head faced, torqued in order', 'replaced gasket, set valves', 'R&R head, cleaned fins'],
+    fixes: [
+      'new head gasket, head faced, torqued in order',
+      'replaced gasket, set valves',
+      'R&R head, cleaned fins',
+    ],
   },
   'Crankshaft seal': {
     complaints: ['oil leak', 'oil on belt', 'oil under engine', 'oil on driveway'],
