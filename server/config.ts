@@ -12,6 +12,7 @@ const settings = z.object({
   DATA_DIR: z.string().min(1).default('.data'),
   DATABASE_URL: z.string().startsWith('postgres').optional(),
   DEMO: flag.default(true),
+  DEMO_DAY: z.iso.date().optional(),
   SESSION_SECRET: z.string().min(32, 'at least 32 characters').optional(),
   SMTP_URL: z.string().startsWith('smtp').optional(),
   MAIL_FROM: z.string().min(3).default('Witness Mark <witness-mark@localhost>'),
@@ -29,6 +30,8 @@ export type Config = {
   /** The migrator's; absent where the local cluster is used. */
   databaseUrl: string | undefined;
   demo: boolean;
+  /** The day on which the demo shop's records end; today where absent. */
+  demoDay: string | undefined;
   sessionSecret: string | undefined;
   /** Absent: mail goes to the local outbox. */
   smtpUrl: string | undefined;
@@ -62,6 +65,7 @@ export function readConfig(env: NodeJS.ProcessEnv = process.env): Config {
     dataDir: path.resolve(values.DATA_DIR),
     databaseUrl: values.DATABASE_URL,
     demo: values.DEMO,
+    demoDay: values.DEMO_DAY,
     sessionSecret: values.SESSION_SECRET,
     smtpUrl: values.SMTP_URL,
     mailFrom: values.MAIL_FROM,

@@ -20,7 +20,7 @@ import { sessionSecretOf } from './secret';
 const say = (line: string) => void process.stdout.write(`${line}\n`);
 
 /** Everything that `npm start` brings up, in order; what it started ends in reverse. */
-async function start(config: Config): Promise<() => Promise<void>> {
+async function start(config: Config): Promise<{ end: () => Promise<void>; databaseUrl: string }> {
   const endings: (() => Promise<void> | void)[] = [];
   const end = async () => {
     for (const ending of endings.reverse()) await ending();
@@ -62,7 +62,7 @@ async function start(config: Config): Promise<() => Promise<void>> {
     const server = createApp(deps).listen(config.port, config.host);
     await new Promise<void>((resolve, reject) => server.once('listening', resolve).once('error', reject));
     endings.push(() => drain(server));
-    return end;
+    return { end, databaseUrl };
   } catch (error) {
     await end();
     throw error;
@@ -96,13 +96,15 @@ async function main() {
   };
   process.on('SIGINT', stop);
   process.on('SIGTERM', stop);
-  end = await start(config);
+  const started = await start(config);
+  end = started.end;
   if (isEnding) {
     await end();
     process.exit(0);
   }
   say(`\nWitness Mark is at ${config.publicUrl}`);
-  const signIns = config.demo ? await demoSignIns(config) : [];
+  const signIns =
+    config.demo && config.environment !== 'production' ? await demoSignIns(started.databaseUrl) : [];
   if (signIns.length > 0) {
     say(`Demo sign-ins (password ${DEMO_PASSWORD}):`);
     for (const { email, role } of signIns) say(`  ${email}  ${role}`);

@@ -1,0 +1,132 @@
+import bcrypt from 'bcrypt';
+import { mkdtemp, rm, writeFile } from 'node:fs/promises';
+import os from 'node:os';
+import path from 'node:path';
+import { setTimeout as wait } from 'node:timers/promises';
+import pg from 'pg';
+import { ROLE_NAMES, type Role } from '../../shared/roles';
+import { withShop } from '../db/tenancy';
+import type { Deps } from '../deps';
+import { importFile } from '../imports/import-file';
+import { requestAnalysis } from '../jobs/request-analysis';
+import { BCRYPT_COST, todayIn } from '../resources/session/service';
+import { arrangeShop, decideOldComebacks } from './arrange';
+import { toCsv } from './csv';
+import { PART_COLUMNS, REPAIR_COLUMNS, UNIT_COLUMNS } from './native-rows';
+import { simulateMillrace, type Millrace } from './simulate-millrace';
+
+export const DEMO_PASSWORD = 'witness-mark-demo';
+const SHOP_NAME = 'Millrace Small Engine';
+const TIME_ZONE = 'America/New_York';
+
+const PEOPLE: readonly { mailbox: string; name: string; role: Role }[] = [
+  { mailbox: 'owner', name: 'Ines Aldane', role: 'owner' },
+  { mailbox: 'manager', name: 'Tom Varley', role: 'service_manager' },
+  { mailbox: 'tech', name: 'Dale Kettering', role: 'technician' },
+  { mailbox: 'books', name: 'Noor Halvard', role: 'accountant' },
+  { mailbox: 'counter', name: 'Wren Castell', role: 'counter' },
+];
+const emailOf = (mailbox: string) => `${mailbox}@millrace.example`;
+
+/** Who can sign in to the demo shop; none where it is not there. */
+export async function demoSignIns(databaseUrl: string): Promise<{ email: string; role: string }[]> {
+  return withMigrator(databaseUrl, async (client) => {
+    const { rows } = await client.query('SELECT FROM shops WHERE name = $1', [SHOP_NAME]);
+    if (rows.length === 0) return [];
+    return PEOPLE.map(({ mailbox, role }) => ({ email: emailOf(mailbox), role: ROLE_NAMES[role] }));
+  });
+}
+
+/**
+ * Brings the demo shop into a database that has no shop, through the same import as anybody's records, and waits
+ * until its figures are there. The records end on the demo day of the settings, else today.
+ */
+export async function loadDemoIfEmpty(
+  deps: Deps,
+  databaseUrl: string,
+  say: (line: string) => void,
+): Promise<void> {
+  const created = await withMigrator(databaseUrl, createShop);
+  if (!created) return;
+  say(`Loading the demo shop, ${SHOP_NAME}: about half a minute`);
+  const { shopId, managerId } = created;
+  const asOf = deps.config.demoDay ?? todayIn(TIME_ZONE, deps.now());
+  const shop = simulateMillrace({ asOf });
+  await importRecords(deps, shopId, managerId, shop);
+  await withShop(deps.database, shopId, (tx) => arrangeShop(tx, shopId, shop));
+  await withShop(deps.database, shopId, (tx) => requestAnalysis(tx, deps, shopId));
+  deps.jobs.wake('analysis');
+  await analysisReady(deps, shopId);
+  await withShop(deps.database, shopId, (tx) => decideOldComebacks(tx, { managerId, asOf }));
+}
+
+async function withMigrator<Result>(databaseUrl: string, work: (client: pg.Client) => Promise<Result>) {
+  const client = new pg.Client({ connectionString: databaseUrl });
+  await client.connect();
+  try {
+    return await work(client);
+  } finally {
+    await client.end();
+  }
+}
+
+/** The shop and its people; nothing where there is any shop already. */
+async function createShop(client: pg.Client): Promise<{ shopId: string; managerId: string } | undefined> {
+  const { rows } = await client.query<{ id: string }>(
+    `INSERT INTO shops (name, time_zone) SELECT $1, $2 WHERE NOT EXISTS (SELECT FROM shops) RETURNING id`,
+    [SHOP_NAME, TIME_ZONE],
+  );
+  const shopId = rows[0]?.id;
+  if (shopId === undefined) return undefined;
+  const hash = await bcrypt.hash(DEMO_PASSWORD, BCRYPT_COST);
+  let managerId = '';
+  for (const { mailbox, name, role } of PEOPLE) {
+    const person = await client.query<{ id: string }>(
+      'INSERT INTO users (email, display_name, password_hash) VALUES ($1, $2, $3) RETURNING id',
+      [emailOf(mailbox), name, hash],
+    );
+    const userId = person.rows[0]?.id ?? '';
+    if (role === 'service_manager') managerId = userId;
+    await client.query('INSERT INTO memberships (shop_id, user_id, role) VALUES ($1, $2, $3)', [
+      shopId,
+      userId,
+      role,
+    ]);
+  }
+  return { shopId, managerId };
+}
+
+async function importRecords(deps: Deps, shopId: string, userId: string, shop: Millrace): Promise<void> {
+  const folder = await mkdtemp(path.join(os.tmpdir(), 'witness-mark-demo-'));
+  const files = [
+    { kind: 'units', text: toCsv(shop.units, UNIT_COLUMNS) },
+    { kind: 'parts', text: toCsv(shop.parts, PART_COLUMNS) },
+    { kind: 'repairs', text: toCsv(shop.repairs, REPAIR_COLUMNS) },
+  ] as const;
+  try {
+    for (const { kind, text } of files) {
+      const fileName = `millrace-${kind}.csv`;
+      const filePath = path.join(folder, fileName);
+      await writeFile(filePath, text);
+      const done = await importFile(deps, { shopId, kind, filePath, fileName, source: 'shell', userId });
+      if (done.status !== 'done' || done.rejected > 0) {
+        throw new Error(`The demo's ${kind} did not go in: ${done.error ?? `${done.rejected} rejected`}`);
+      }
+    }
+  } finally {
+    await rm(folder, { recursive: true, force: true });
+  }
+}
+
+async function analysisReady(deps: Deps, shopId: string): Promise<void> {
+  for (;;) {
+    const { rows } = await withShop(deps.database, shopId, (tx) =>
+      tx.execute<{ state: string; error: string | null }>(
+        'SELECT state, error FROM analysis_runs ORDER BY requested_at DESC, id LIMIT 1',
+      ),
+    );
+    if (rows[0]?.state === 'ready') return;
+    if (rows[0]?.state === 'failed') throw new Error(`The demo's analysis failed: ${rows[0].error}`);
+    await wait(250);
+  }
+}
