@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { id, instant } from './basics';
+import { id, instant, listOf } from './basics';
 import { ROLES } from './roles';
 
 export const email = z.string().trim().toLowerCase().max(254).pipe(z.email('This is not an e-mail address.'));
@@ -42,3 +42,4 @@ export const sessionListed = z.strictObject({
   createdAt: instant,
   lastSeenAt: instant,
 });
+export const sessionList = listOf(sessionListed);

@@ -6,15 +6,10 @@ import type { KeyScope, Role } from '../../shared/roles';
 import type { Database } from '../db/client';
 import { sessions } from '../db/schema/index';
 import type { Deps } from '../deps';
-import type { Actor } from './actor';
+import type { Actor, KeyActor } from './actor';
 import { AppError } from './errors';
-import {
-  IDLE_HOURS,
-  readSessionToken,
-  SESSION_COOKIE,
-  setSessionCookie,
-  signSessionToken,
-} from './session-token';
+import { createKeyUse } from './key-use';
+import { IDLE_HOURS, readSessionToken, SESSION_COOKIE, setSessionCookie } from './session-token';
 
 const RENEW_AFTER_SECONDS = 60;
 
@@ -22,21 +17,23 @@ export const hashSecret = (secret: string) => createHash('sha256').update(secret
 
 /** Puts the actor on the request where a key or a session says who it is; routes decide whether they need one. */
 export function authenticate(deps: Deps): RequestHandler {
+  const noteKeyUse = createKeyUse(deps);
   return async (request, response, next) => {
     const header = request.get('authorization');
     if (header !== undefined) {
-      request.actor = await actorOfKey(deps, header);
+      const actor = await actorOfKey(deps, header);
+      await noteKeyUse(actor);
+      request.actor = actor;
       return next();
     }
     const cookies = z.record(z.string(), z.string()).catch({}).parse(request.cookies);
     const token = cookies[SESSION_COOKIE];
-    const sessionId = token && readSessionToken(token, deps.sessionSecret);
+    const sessionId = token && readSessionToken(token, deps.sessionSecret, deps.now());
     if (!sessionId) return next();
     const found = await actorOfSession(deps, sessionId);
     if (found) {
       request.actor = found.actor;
-      if (found.wasRenewed)
-        setSessionCookie(response, signSessionToken(sessionId, deps.sessionSecret), deps.config);
+      if (found.wasRenewed) setSessionCookie(response, { id: sessionId, expiresAt: found.expiresAt }, deps);
     }
     next();
   };
@@ -62,7 +59,7 @@ function isOwnOrigin(origin: string, request: Request, deps: Deps): boolean {
   return origin === `${request.protocol}://${request.get('host')}`;
 }
 
-async function actorOfKey(deps: Deps, header: string): Promise<Actor> {
+async function actorOfKey(deps: Deps, header: string): Promise<KeyActor> {
   const key = /^Bearer\s+(\S+)$/i.exec(header)?.[1];
   const found = key && (await findKey(deps.database, key));
   if (!found) throw new AppError('unauthenticated', 'This key is not known, or was revoked.');
@@ -76,7 +73,7 @@ const keyRow = z.object({
   may_read: z.boolean(),
 });
 
-async function findKey(database: Database, key: string): Promise<Actor | undefined> {
+async function findKey(database: Database, key: string): Promise<KeyActor | undefined> {
   const { rows } = await database.execute(sql`SELECT * FROM api_key_by_hash(${hashSecret(key)})`);
   const row = rows[0] && keyRow.parse(rows[0]);
   if (!row) return undefined;
@@ -102,7 +99,12 @@ async function actorOfSession(deps: Deps, sessionId: string) {
   const now = deps.now();
   const idleSince = new Date(now.getTime() - IDLE_HOURS * 3_600_000);
   const [session] = await deps.database
-    .select({ userId: sessions.userId, shopId: sessions.shopId, lastSeenAt: sessions.lastSeenAt })
+    .select({
+      userId: sessions.userId,
+      shopId: sessions.shopId,
+      lastSeenAt: sessions.lastSeenAt,
+      expiresAt: sessions.expiresAt,
+    })
     .from(sessions)
     .where(
       and(
@@ -127,5 +129,5 @@ async function actorOfSession(deps: Deps, sessionId: string) {
     shopId: membership.id,
     role: membership.role,
   };
-  return { actor, wasRenewed };
+  return { actor, wasRenewed, expiresAt: session.expiresAt };
 }

@@ -1,13 +1,16 @@
-import rateLimit from 'express-rate-limit';
-import { changeShop, session, signIn } from '../../../shared/session';
+import { idParams, pageQuery } from '../../../shared/basics';
+import { changeShop, session, sessionList, signIn } from '../../../shared/session';
 import type { Deps } from '../../deps';
 import { AppError } from '../../http/errors';
+import { createFailedSignInLimit } from '../../http/failed-sign-ins';
 import { route, type Route } from '../../http/route';
-import { clearSessionCookie, setSessionCookie, signSessionToken } from '../../http/session-token';
-import { changeSessionShop, describeSession, endSession, openSession } from './service';
+import { clearSessionCookie, setSessionCookie } from '../../http/session-token';
+import { changeSessionShop, describeSession, findPerson, openSession } from './service';
+import { endEverySession, endOneSession, listSessions } from './sessions';
 
-/** Sign-in, sign-out, who am I, and another of one's shops. */
+/** Sign-in, sign-out, who am I, another of one's shops, and where else one is signed in. */
 export function sessionRoutes(deps: Deps): Route[] {
+  const limit = createFailedSignInLimit(deps.now);
   return [
     route({
       method: 'post',
@@ -15,13 +18,23 @@ export function sessionRoutes(deps: Deps): Route[] {
       tag: 'session',
       summary: 'Sign in',
       access: 'public',
-      before: [failedSignInLimiter()],
       body: signIn,
       answer: session,
-      handle: async ({ body, request, response }) => {
-        const opened = await openSession(deps, body, request.get('user-agent') ?? '');
-        setSessionCookie(response, signSessionToken(opened.sessionId, deps.sessionSecret), deps.config);
-        return opened.session;
+      handle: async ({ body, actor, request, response }) => {
+        limit.requireRoom(request, response, body.email);
+        const person = await findPerson(deps, body);
+        // Guesses sent at one moment pass the first check together; none of them learns more than the tenth.
+        limit.requireRoom(request, response, body.email);
+        if (!person) {
+          limit.note(request, body.email);
+          throw new AppError('unauthenticated', 'This e-mail and password do not go together.');
+        }
+        const opened = await openSession(deps, person, {
+          userAgent: request.get('user-agent') ?? '',
+          replaces: request.actor?.kind === 'user' ? actor : undefined,
+        });
+        setSessionCookie(response, opened.session, deps);
+        return opened.answer;
       },
     }),
     route({
@@ -50,29 +63,39 @@ export function sessionRoutes(deps: Deps): Route[] {
       summary: 'Sign out',
       access: 'signedIn',
       handle: async ({ actor, response }) => {
-        await endSession(deps, actor);
+        await endOneSession(deps, actor);
         clearSessionCookie(response, deps.config);
       },
     }),
+    route({
+      method: 'get',
+      path: '/sessions',
+      tag: 'session',
+      summary: 'Where one is signed in',
+      access: 'signedIn',
+      query: pageQuery,
+      answer: sessionList,
+      handle: ({ actor, query }) => listSessions(deps, actor, query),
+    }),
+    route({
+      method: 'delete',
+      path: '/sessions',
+      tag: 'session',
+      summary: 'Sign out everywhere',
+      access: 'signedIn',
+      handle: async ({ actor, response }) => {
+        await endEverySession(deps, actor);
+        clearSessionCookie(response, deps.config);
+      },
+    }),
+    route({
+      method: 'delete',
+      path: '/sessions/:id',
+      tag: 'session',
+      summary: 'Sign out in one other place',
+      access: 'signedIn',
+      params: idParams,
+      handle: ({ actor, params }) => endOneSession(deps, actor, params.id),
+    }),
   ];
-}
-
-/** Only failed sign-ins count: ten in a quarter of an hour for one address and e-mail. */
-function failedSignInLimiter() {
-  return rateLimit({
-    windowMs: 15 * 60_000,
-    limit: 10,
-    skipSuccessfulRequests: true,
-    standardHeaders: 'draft-8',
-    legacyHeaders: false,
-    keyGenerator: (request) => {
-      const body: unknown = request.body;
-      const email = body && typeof body === 'object' && 'email' in body ? String(body.email) : '';
-      return `${request.ip}|${email.trim().toLowerCase()}`;
-    },
-    validate: { keyGeneratorIpFallback: false },
-    handler: () => {
-      throw new AppError('tooMany', 'Too many failed sign-ins. Try again in a quarter of an hour.');
-    },
-  });
 }

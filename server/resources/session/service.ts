@@ -6,44 +6,49 @@ import type { Session } from '../../../shared/session';
 import { sessions, shops, users } from '../../db/schema/index';
 import { withShop } from '../../db/tenancy';
 import type { Deps } from '../../deps';
-import type { Actor } from '../../http/actor';
+import { requireUser, type Actor } from '../../http/actor';
 import { membershipsOf } from '../../http/authenticate';
-import { AppError, forbidden, missing } from '../../http/errors';
+import { missing } from '../../http/errors';
 import { LONGEST_DAYS } from '../../http/session-token';
+import { endOneSession } from './sessions';
 
 export const BCRYPT_COST = 11;
 // Compared where there is no such person, so that the answer takes as long either way.
 const NOBODY = bcrypt.hashSync('nobody has this password', BCRYPT_COST);
 
-/**
- * Opens a new session for an e-mail and password, in the first of the person's shops.
- * @throws unauthenticated, with the same words whatever was wrong.
- */
-export async function openSession(
-  deps: Deps,
-  credentials: { email: string; password: string },
-  userAgent: string,
-) {
+/** The person whom an e-mail and password name, with the first of their shops; undefined whatever was wrong. */
+export async function findPerson(deps: Deps, credentials: { email: string; password: string }) {
   const [user] = await deps.database
     .select({ id: users.id, passwordHash: users.passwordHash })
     .from(users)
     .where(eq(users.email, credentials.email));
   const isRight = await bcrypt.compare(credentials.password, user?.passwordHash ?? NOBODY);
   const shop = user?.passwordHash && isRight ? (await membershipsOf(deps.database, user.id))[0] : undefined;
-  if (!user || !shop) throw new AppError('unauthenticated', 'This e-mail and password do not go together.');
+  return user && shop && { userId: user.id, shopId: shop.id };
+}
+
+/** Opens a new session; the one that the same browser had before ends. */
+export async function openSession(
+  deps: Deps,
+  { userId, shopId }: { userId: string; shopId: string },
+  { userAgent, replaces }: { userAgent: string; replaces: Actor | undefined },
+) {
   const now = deps.now();
+  const expiresAt = new Date(now.getTime() + LONGEST_DAYS * 86_400_000);
   const [opened] = await deps.database
     .insert(sessions)
     .values({
-      userId: user.id,
-      shopId: shop.id,
+      userId,
+      shopId,
+      createdAt: now,
       lastSeenAt: now,
-      expiresAt: new Date(now.getTime() + LONGEST_DAYS * 86_400_000),
+      expiresAt,
       userAgent: userAgent.slice(0, 300),
     })
     .returning({ id: sessions.id });
   if (!opened) throw new Error('no session row');
-  return { sessionId: opened.id, session: await describe(deps, user.id, shop.id) };
+  if (replaces) await endOneSession(deps, replaces);
+  return { session: { id: opened.id, expiresAt }, answer: await describe(deps, userId, shopId) };
 }
 
 export function describeSession(deps: Deps, actor: Actor): Promise<Session> {
@@ -57,18 +62,6 @@ export async function changeSessionShop(deps: Deps, actor: Actor, shopId: string
   if (!shop) throw missing('shop');
   await deps.database.update(sessions).set({ shopId }).where(eq(sessions.id, sessionId));
   return describe(deps, userId, shopId);
-}
-
-export async function endSession(deps: Deps, actor: Actor): Promise<void> {
-  await deps.database
-    .update(sessions)
-    .set({ revokedAt: deps.now() })
-    .where(eq(sessions.id, requireUser(actor).sessionId));
-}
-
-export function requireUser(actor: Actor) {
-  if (actor.kind !== 'user') throw forbidden('This is for people who are signed in.');
-  return actor;
 }
 
 async function describe(deps: Deps, userId: string, shopId: string): Promise<Session> {
