@@ -16,7 +16,7 @@ export const listOf = <Item extends z.ZodType>(item: Item) =>
 
 export const pageQuery = z.strictObject({
   limit: z.coerce.number().int().min(1).max(1000).default(100),
-  cursor: z.string().max(400).optional(),
+  cursor: z.string().max(2000).optional(),
 });
 
 export const idParams = z.strictObject({ id });
