@@ -38,7 +38,7 @@ export interface ComebackPlan {
 export const COMEBACK_PLANS: readonly ComebackPlan[] = [
   {
     reason: 'part_failed_again',
-    chance: 0.005,
+    chance: 0.0053,
     lagDays: [20, 80],
     payType: 'shop',
     causes: ['{part} failed again', 'same {part} gone after short time', '2nd {part} this season'],
@@ -50,7 +50,7 @@ export const COMEBACK_PLANS: readonly ComebackPlan[] = [
   },
   {
     reason: 'workmanship',
-    chance: 0.008,
+    chance: 0.0084,
     lagDays: [1, 25],
     work: 'tightened',
     payType: 'shop',
@@ -68,7 +68,7 @@ export const COMEBACK_PLANS: readonly ComebackPlan[] = [
   },
   {
     reason: 'wrong_part',
-    chance: 0.004,
+    chance: 0.0042,
     lagDays: [1, 30],
     payType: 'shop',
     causes: [
@@ -84,7 +84,7 @@ export const COMEBACK_PLANS: readonly ComebackPlan[] = [
   },
   {
     reason: 'defective_part',
-    chance: 0.0045,
+    chance: 0.0048,
     lagDays: [1, 20],
     payType: 'warranty',
     causes: [
@@ -100,7 +100,7 @@ export const COMEBACK_PLANS: readonly ComebackPlan[] = [
   },
   {
     reason: 'work_not_completed',
-    chance: 0.004,
+    chance: 0.0055,
     lagDays: [1, 15],
     work: 'repaired',
     payType: 'shop',
@@ -117,7 +117,7 @@ export const COMEBACK_PLANS: readonly ComebackPlan[] = [
   },
   {
     reason: 'not_duplicated',
-    chance: 0.005,
+    chance: 0.0053,
     lagDays: [3, 40],
     payType: 'customer',
     firstWork: 'nothing_found',
@@ -135,7 +135,7 @@ export const COMEBACK_PLANS: readonly ComebackPlan[] = [
   },
   {
     reason: 'operator_or_fuel',
-    chance: 0.028,
+    chance: 0.0468,
     systems: ['fuel', 'ignition'],
     lagDays: [5, 60],
     work: 'cleaned',
@@ -156,7 +156,7 @@ export const COMEBACK_PLANS: readonly ComebackPlan[] = [
   },
   {
     reason: 'declined_work',
-    chance: 0.006,
+    chance: 0.0063,
     lagDays: [10, 75],
     payType: 'customer',
     firstWork: 'adjusted',
@@ -171,7 +171,7 @@ export const COMEBACK_PLANS: readonly ComebackPlan[] = [
   },
   {
     reason: 'unrelated',
-    chance: 0.004,
+    chance: 0.0042,
     lagDays: [8, 70],
     component: 'Tire',
     payType: 'customer',

@@ -65,7 +65,7 @@ function component(
     system,
     builds,
     ...(life ? { life: { shape: life[0], scaleHours: life[1] } } : {}),
-    seenWorn: 0.6,
+    seenWorn: 0.75,
     laborOp,
     laborHours,
     price: [low, high],
@@ -90,8 +90,8 @@ export const COMPONENTS: readonly Component[] = [
     ['PTO-10', 1.2, 236, 278],
     ['CLUTCH, ELECTRIC PTO', 'PTO CLUTCH', 'CLUTCH ASSY ELEC'],
     {
-      ...inFamily('Tarnlow 38-series clutch', 1.9, 430),
-      seenWorn: 0.12,
+      ...inFamily('Tarnlow 38-series clutch', 1.9, 780),
+      seenWorn: 0.25,
       numbered: 'model',
       cure: { work: 'adjusted', share: 0.16 },
     },
@@ -103,7 +103,7 @@ export const COMPONENTS: readonly Component[] = [
     [1.3, 5200],
     ['PTO-20', 0.4, 15, 20],
     ['SWITCH, PTO', 'PTO SW', 'SWITCH BLADE ENGAGE'],
-    { seenWorn: 0.1 },
+    { seenWorn: 0.4 },
   ),
   component(
     'Main fuse',
@@ -112,7 +112,7 @@ export const COMPONENTS: readonly Component[] = [
     [1.1, 6500],
     ['ELE-05', 0.3, 3, 5],
     ['FUSE, BLADE 20A', 'FUSE 20 AMP'],
-    { seenWorn: 0.05, numbered: 'universal' },
+    { seenWorn: 0.3, numbered: 'universal' },
   ),
   component(
     'Voltage regulator',
@@ -122,8 +122,8 @@ export const COMPONENTS: readonly Component[] = [
     ['ELE-30', 0.7, 46, 68],
     ['REGULATOR, VOLTAGE', 'REG/RECTIFIER'],
     {
-      ...inFamily('Dunmarch DV23 engine', 2, 270),
-      seenWorn: 0.1,
+      ...inFamily('Dunmarch DV23 engine', 2, 860),
+      seenWorn: 0.4,
       cure: { work: 'cleaned', share: 0.06 },
     },
   ),
@@ -134,7 +134,7 @@ export const COMPONENTS: readonly Component[] = [
     [1.6, 7500],
     ['ELE-35', 2.1, 92, 138],
     ['STATOR, CHARGING', 'STATOR ASSY'],
-    { seenWorn: 0.1 },
+    { seenWorn: 0.4 },
   ),
   component(
     'Battery',
@@ -143,7 +143,7 @@ export const COMPONENTS: readonly Component[] = [
     [2, 1500],
     ['ELE-10', 0.3, 62, 88],
     ['BATTERY, 12V U1', 'BATTERY U1R 12V'],
-    { numbered: 'universal', seenWorn: 0.5, cure: { work: 'tested_good', share: 0.05 } },
+    { numbered: 'universal', seenWorn: 0.75, cure: { work: 'tested_good', share: 0.05 } },
   ),
   component(
     'Battery cable',
@@ -153,8 +153,8 @@ export const COMPONENTS: readonly Component[] = [
     ['ELE-15', 0.6, 14, 24],
     ['CABLE, BATTERY POS', 'BATT CABLE', 'CABLE, BATTERY NEG'],
     {
-      ...inFamily('Greyhollow 42/46 deck', 1.9, 250),
-      seenWorn: 0.12,
+      ...inFamily('Greyhollow 42/46 deck', 1.9, 680),
+      seenWorn: 0.25,
       cure: { work: 'cleaned', share: 0.12 },
     },
   ),
@@ -165,7 +165,7 @@ export const COMPONENTS: readonly Component[] = [
     [1.5, 3300],
     ['STA-20', 0.5, 22, 34],
     ['SOLENOID, STARTER', 'STARTER RELAY SOLENOID'],
-    { seenWorn: 0.1 },
+    { seenWorn: 0.4 },
   ),
   component(
     'Starter motor',
@@ -174,13 +174,13 @@ export const COMPONENTS: readonly Component[] = [
     [2, 3200],
     ['STA-10', 1, 118, 165],
     ['STARTER, ELECTRIC', 'STARTER MOTOR ASSY'],
-    { seenWorn: 0.3 },
+    { seenWorn: 0.6 },
   ),
   component(
     'Recoil starter',
     'starting',
     ['push', 'snow', 'handheld', 'hydroWalk'],
-    [1.8, 620],
+    [1.8, 900],
     ['STA-40', 0.6, 28, 52],
     ['STARTER, RECOIL', 'RECOIL ASSY'],
     { cure: { work: 'repaired', share: 0.35 } },
@@ -192,7 +192,7 @@ export const COMPONENTS: readonly Component[] = [
     [1.3, 2400],
     ['FUE-10', 1.3, 74, 128],
     ['CARBURETOR ASSY', 'CARB', 'CARB ASSEMBLY'],
-    { cure: { work: 'cleaned', share: 0.5 }, seenWorn: 0.2 },
+    { cure: { work: 'cleaned', share: 0.5 }, seenWorn: 0.5 },
   ),
   component(
     'Fuel pump',
@@ -201,7 +201,7 @@ export const COMPONENTS: readonly Component[] = [
     [4.5, 1250],
     ['FUE-30', 0.6, 24, 38],
     ['PUMP, FUEL PULSE', 'FUEL PUMP'],
-    { seenWorn: 0.1 },
+    { seenWorn: 0.4 },
   ),
   component(
     'Fuel filter',
@@ -237,7 +237,7 @@ export const COMPONENTS: readonly Component[] = [
     [4.5, 1250],
     ['IGN-10', 0.8, 44, 72],
     ['COIL, IGNITION', 'IGN MODULE'],
-    { seenWorn: 0.08 },
+    { seenWorn: 0.4 },
   ),
   component(
     'Flywheel key',
@@ -246,7 +246,7 @@ export const COMPONENTS: readonly Component[] = [
     [1, 3800],
     ['IGN-20', 1.1, 2, 4],
     ['KEY, FLYWHEEL', 'FLYWHEEL KEY'],
-    { numbered: 'universal', seenWorn: 0 },
+    { numbered: 'universal', seenWorn: 0.1 },
   ),
   component(
     'Deck belt',
@@ -265,8 +265,8 @@ export const COMPONENTS: readonly Component[] = [
     ['DEC-20', 1.1, 13, 21, 2],
     ['BEARING, SPINDLE', 'SPINDLE BRG', 'BEARING BLADE SPINDLE'],
     {
-      ...inFamily('Oakrill fabricated deck', 2, 760),
-      seenWorn: 0.15,
+      ...inFamily('Oakrill fabricated deck', 2, 580),
+      seenWorn: 0.3,
     },
   ),
   component(
@@ -313,8 +313,8 @@ export const COMPONENTS: readonly Component[] = [
     ['DRV-20', 0.6, 21, 34],
     ['PULLEY, IDLER V', 'IDLER DRIVE'],
     {
-      ...inFamily('Oakrill walk-behind deck', 2, 640),
-      seenWorn: 0.15,
+      ...inFamily('Oakrill walk-behind deck', 2, 480),
+      seenWorn: 0.3,
     },
   ),
   component(
@@ -324,13 +324,13 @@ export const COMPONENTS: readonly Component[] = [
     [2.1, 5200],
     ['DRV-40', 2.8, 365, 480],
     ['PUMP, HYDRO', 'HYDRO PUMP'],
-    { seenWorn: 0.3, cure: { work: 'adjusted', share: 0.25 } },
+    { seenWorn: 0.6, cure: { work: 'adjusted', share: 0.25 } },
   ),
   component(
     'Drive cable',
     'drive',
     ['push', 'snow'],
-    [1.8, 520],
+    [1.8, 700],
     ['DRV-30', 0.5, 17, 28],
     ['CABLE, DRIVE', 'DRIVE CONTROL CABLE'],
     { cure: { work: 'adjusted', share: 0.3 } },
@@ -339,7 +339,7 @@ export const COMPONENTS: readonly Component[] = [
     'Friction wheel',
     'drive',
     ['snow'],
-    [2, 310],
+    [2, 420],
     ['DRV-50', 1, 21, 33],
     ['WHEEL, FRICTION', 'FRICTION DISC RUBBER'],
     { seenWorn: 0.7 },
@@ -348,7 +348,7 @@ export const COMPONENTS: readonly Component[] = [
     'Auger belt',
     'drive',
     ['snow'],
-    [2.2, 290],
+    [2.2, 360],
     ['SNO-10', 0.8, 19, 32],
     ['BELT, AUGER', 'AUGER BELT'],
     { numbered: 'model', servicedShare: 0.25, seenWorn: 0.8 },
@@ -357,10 +357,10 @@ export const COMPONENTS: readonly Component[] = [
     'Shear pin',
     'drive',
     ['snow'],
-    [1, 210],
+    [1, 420],
     ['SNO-20', 0.2, 2, 4, 2],
     ['PIN, SHEAR', 'SHEAR BOLT'],
-    { numbered: 'universal', seenWorn: 0 },
+    { numbered: 'universal', seenWorn: 0.1 },
   ),
   component(
     'Seat switch',
@@ -369,7 +369,7 @@ export const COMPONENTS: readonly Component[] = [
     [4.5, 1450],
     ['SAF-10', 0.5, 17, 27],
     ['SWITCH, SEAT', 'SEAT SW'],
-    { seenWorn: 0.08, cure: { work: 'cleaned', share: 0.05 } },
+    { seenWorn: 0.4, cure: { work: 'cleaned', share: 0.05 } },
   ),
   component(
     'Brake switch',
@@ -378,7 +378,7 @@ export const COMPONENTS: readonly Component[] = [
     [1.4, 4800],
     ['SAF-20', 0.5, 13, 21],
     ['SWITCH, BRAKE', 'BRAKE INTERLOCK SW'],
-    { seenWorn: 0.15, cure: { work: 'adjusted', share: 0.3 } },
+    { seenWorn: 0.3, cure: { work: 'adjusted', share: 0.3 } },
   ),
   component(
     'Neutral switch',
@@ -387,7 +387,7 @@ export const COMPONENTS: readonly Component[] = [
     [1.4, 5200],
     ['SAF-30', 0.5, 13, 22],
     ['SWITCH, NEUTRAL', 'NEUTRAL SW LAP BAR'],
-    { seenWorn: 0.15, cure: { work: 'adjusted', share: 0.25 } },
+    { seenWorn: 0.3, cure: { work: 'adjusted', share: 0.25 } },
   ),
   component(
     'Caster bearing',
@@ -396,7 +396,7 @@ export const COMPONENTS: readonly Component[] = [
     [4.5, 1450],
     ['CHA-10', 0.6, 9, 16, 2],
     ['BEARING, CASTER', 'BUSHING CASTER WHEEL'],
-    { seenWorn: 0.3 },
+    { seenWorn: 0.6 },
   ),
   component(
     'Tire',
@@ -405,7 +405,7 @@ export const COMPONENTS: readonly Component[] = [
     [1.4, 3300],
     ['CHA-20', 0.4, 34, 68],
     ['TIRE', 'TIRE 13X5.00-6'],
-    { seenWorn: 0.5, cure: { work: 'repaired', share: 0.4 } },
+    { seenWorn: 0.75, cure: { work: 'repaired', share: 0.4 } },
   ),
   component(
     'Hour meter',
@@ -414,7 +414,7 @@ export const COMPONENTS: readonly Component[] = [
     [1.2, 9500],
     ['CHA-30', 0.3, 29, 44],
     ['METER, HOUR', 'HOUR METER'],
-    { seenWorn: 0 },
+    { seenWorn: 0.1 },
   ),
   component('Air filter', 'engine', ALL, null, ['ENG-05', 0.2, 12, 22], ['FILTER, AIR', 'AIR FILTER W/PRE'], {
     servicedShare: 0.8,
@@ -438,7 +438,7 @@ export const COMPONENTS: readonly Component[] = [
     [2, 4200],
     ['ENG-20', 2.6, 16, 28],
     ['GASKET, CYL HEAD', 'HEAD GASKET'],
-    { seenWorn: 0.1 },
+    { seenWorn: 0.4 },
   ),
   component(
     'Crankshaft seal',
@@ -447,7 +447,7 @@ export const COMPONENTS: readonly Component[] = [
     [2.2, 4300],
     ['ENG-30', 1.6, 9, 15],
     ['SEAL, CRANKSHAFT', 'OIL SEAL PTO SIDE'],
-    { seenWorn: 0.5 },
+    { seenWorn: 0.75 },
   ),
 ];
 

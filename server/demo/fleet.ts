@@ -47,9 +47,9 @@ function pickHoursPerYear(random: Random, model: Model, useClass: UseClass): num
   return scale * random.between(220, 460);
 }
 
-/** One year in three the machine is older than the shop's records, and is known from their first day only. */
+/** Half of the time the machine is older than the shop's records, and is known from their first day only. */
 function pickInServiceDay(random: Random, plan: FleetPlan): number {
-  return random.chance(0.36)
+  return random.chance(0.5)
     ? plan.firstDay - random.whole(30, 900)
     : random.whole(plan.firstDay, plan.asOfDay - 45);
 }

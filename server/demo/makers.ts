@@ -19,6 +19,8 @@ export interface Model {
   /** Share of these machines that work for a living. */
   commercialShare: number;
   hasMeter: boolean;
+  /** How many times longer its parts last than those of a machine built for households. */
+  toughness: number;
 }
 
 export interface Family {
@@ -43,7 +45,11 @@ export function buildModel(
   model: string,
   build: Build,
   engine: readonly [maker: string, model: string],
-  [weight, commercialShare]: readonly [number, number],
+  [weight, commercialShare, toughness = 1]: readonly [
+    weight: number,
+    commercialShare: number,
+    toughness?: number,
+  ],
 ): Model {
   return {
     maker,
@@ -51,6 +57,7 @@ export function buildModel(
     build,
     weight,
     commercialShare,
+    toughness,
     productType: PRODUCT[build],
     season: SEASON[build] ?? 'mowing',
     engineMaker: engine[0],
@@ -66,26 +73,26 @@ const SMALL = ['Ostwick', 'OS6'] as const;
 
 /** All makers, models and engines are invented. */
 export const MODELS: readonly Model[] = [
-  buildModel('Tarnlow', 'TZ-48', 'zeroTurn', BIG_TWIN, [9, 0.22]),
-  buildModel('Tarnlow', 'TZ-54', 'zeroTurn', BIG_TWIN, [9, 0.3]),
-  buildModel('Tarnlow', 'TZ-60', 'zeroTurn', BIG_TWIN, [7, 0.4]),
-  buildModel('Tarnlow', 'TL-42', 'tractor', TWIN, [7, 0.02]),
-  buildModel('Tarnlow', 'TL-46', 'tractor', TWIN, [8, 0.06]),
-  buildModel('Oakrill', 'R52C', 'zeroTurn', BIG_TWIN, [6, 0.55]),
-  buildModel('Oakrill', 'R60C', 'zeroTurn', BIG_TWIN, [6, 0.6]),
-  buildModel('Oakrill', 'R61C', 'zeroTurn', BIG_TWIN, [4, 0.65]),
-  buildModel('Oakrill', 'W36', 'hydroWalk', SINGLE, [4, 0.65]),
-  buildModel('Oakrill', 'W48', 'hydroWalk', SINGLE, [4, 0.7]),
-  buildModel('Greyhollow', '1842', 'tractor', SINGLE, [9, 0.02]),
-  buildModel('Greyhollow', '1846', 'tractor', TWIN, [8, 0.03]),
-  buildModel('Greyhollow', '2148', 'tractor', TWIN, [6, 0.05]),
-  buildModel('Greyhollow', 'P21', 'push', SMALL, [5, 0.06]),
-  buildModel('Greyhollow', 'S22', 'push', SMALL, [5, 0.06]),
-  buildModel('Brackwater', 'BX24', 'snow', SMALL, [6, 0.05]),
-  buildModel('Brackwater', 'BX28', 'snow', SINGLE, [5, 0.1]),
-  buildModel('Brackwater', 'BX30', 'snow', SINGLE, [3, 0.25]),
-  buildModel('Pellbrook', 'T26', 'handheld', ['Pellbrook', '26cc'], [3, 0.25]),
-  buildModel('Pellbrook', 'B60', 'handheld', ['Pellbrook', '60cc'], [3, 0.3]),
+  buildModel('Tarnlow', 'TZ-48', 'zeroTurn', BIG_TWIN, [9, 0]),
+  buildModel('Tarnlow', 'TZ-54', 'zeroTurn', BIG_TWIN, [9, 0.01]),
+  buildModel('Tarnlow', 'TZ-60', 'zeroTurn', BIG_TWIN, [7, 0.02]),
+  buildModel('Tarnlow', 'TL-42', 'tractor', TWIN, [7, 0]),
+  buildModel('Tarnlow', 'TL-46', 'tractor', TWIN, [8, 0]),
+  buildModel('Oakrill', 'R52C', 'zeroTurn', BIG_TWIN, [6, 0.55, 8]),
+  buildModel('Oakrill', 'R60C', 'zeroTurn', BIG_TWIN, [6, 0.6, 8]),
+  buildModel('Oakrill', 'R61C', 'zeroTurn', BIG_TWIN, [4, 0.65, 8]),
+  buildModel('Oakrill', 'W36', 'hydroWalk', SINGLE, [4, 0.6, 8]),
+  buildModel('Oakrill', 'W48', 'hydroWalk', SINGLE, [4, 0.65, 8]),
+  buildModel('Greyhollow', '1842', 'tractor', SINGLE, [9, 0]),
+  buildModel('Greyhollow', '1846', 'tractor', TWIN, [8, 0]),
+  buildModel('Greyhollow', '2148', 'tractor', TWIN, [6, 0]),
+  buildModel('Greyhollow', 'P21', 'push', SMALL, [5, 0]),
+  buildModel('Greyhollow', 'S22', 'push', SMALL, [5, 0]),
+  buildModel('Brackwater', 'BX24', 'snow', SMALL, [6, 0]),
+  buildModel('Brackwater', 'BX28', 'snow', SINGLE, [5, 0]),
+  buildModel('Brackwater', 'BX30', 'snow', SINGLE, [3, 0.1, 2]),
+  buildModel('Pellbrook', 'T26', 'handheld', ['Pellbrook', '26cc'], [3, 0.1, 3]),
+  buildModel('Pellbrook', 'B60', 'handheld', ['Pellbrook', '60cc'], [3, 0.12, 3]),
 ];
 
 export const FAMILIES: readonly Family[] = [

@@ -45,7 +45,7 @@ export function tellService(history: History, day: number): void {
     technician: technicianFor(history, day),
   });
   for (const { name, builds, servicedShare } of COMPONENTS) {
-    if (servicedShare && builds.includes(unit.model.build) && random.chance(servicedShare * 0.86)) {
+    if (servicedShare && builds.includes(unit.model.build) && random.chance(servicedShare * 0.74)) {
       replace(history, visit, name, 'maintenance');
     }
   }

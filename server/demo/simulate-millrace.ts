@@ -47,7 +47,7 @@ export interface Millrace {
 const SEASONS = 6;
 const REGISTERED_UNITS = 1500;
 const WALK_INS = 60;
-const LIFE_FACTOR = 1;
+const LIFE_FACTOR = 0.62;
 /** Clutches of the bad month that were sent home with a new fuse. */
 const CARELESS_CLUTCHES = 26;
 

@@ -27,11 +27,11 @@ export function numberVisits(visits: readonly Visit[]): Numbered[] {
     });
 }
 
-function repairFields({ visit, repairNumber }: Numbered, world: World, random: Random): Partial<RepairRow> {
+function repairFields({ visit, repairNumber }: Numbered, world: World, random: Random): RepairRow {
   const { unit, words } = visit;
   const { model, customer } = unit;
   const spelling = spellingOf(visit.technician, random);
-  return {
+  return repairRow({
     location: visit.location,
     repair_number: repairNumber,
     ticket_type: visit.ticketType,
@@ -59,7 +59,7 @@ function repairFields({ visit, repairNumber }: Numbered, world: World, random: R
     notes: words.notes,
     technician: spelling,
     pay_type: visit.payType,
-  };
+  });
 }
 
 function lineFields(line: PlannedLine, yearsAgo: number, random: Random): Partial<RepairRow> {
@@ -100,5 +100,5 @@ export function repairRows(numbered: Numbered, world: World, random: Random): Re
   const repair = repairFields(numbered, world, random);
   const yearsAgo = world.yearsAgo(visit.closedDay);
   const lines = visit.lines.map((line) => ({ ...repair, ...lineFields(line, yearsAgo, random) }));
-  return [...lines, { ...repair, ...laborFields(visit, yearsAgo) }].map(repairRow);
+  return [...lines, { ...repair, ...laborFields(visit, yearsAgo) }];
 }

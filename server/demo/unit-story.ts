@@ -10,7 +10,7 @@ import { dayOf } from './calendar';
 import type { World } from './world';
 
 /** How often a household's machine will not start in spring because of old fuel. */
-const STALE_FUEL_CHANCE = 0.075;
+const STALE_FUEL_CHANCE = 0.11;
 
 function tellSetup(history: History, day: number): void {
   const { random } = history;
@@ -37,6 +37,11 @@ function tellSetup(history: History, day: number): void {
   visit.laborOp = 'SET-10';
   visit.meterHours = history.unit.model.hasMeter ? 0.2 : null;
   work(visit, 'Engine oil', 'adjusted');
+}
+
+/** A machine that was in the shop over the winter starts. */
+function tellSpring(history: History, day: number): void {
+  if (history.freeFromDay < day - 130) tellStaleFuel(history, day);
 }
 
 interface Calendar {
@@ -67,7 +72,7 @@ function planCalendar(history: History, carelessClutchDay: number | undefined): 
   for (let year = yearOf(unit.inServiceDay); year <= yearOf(world.asOfDay); year += 1) {
     const { serviceDay, springDay } = planYear(history, year);
     history.later.push({ day: serviceDay, tell: (day) => tellService(history, day) });
-    history.later.push({ day: springDay, tell: (day) => tellStaleFuel(history, day) });
+    history.later.push({ day: springDay, tell: (day) => tellSpring(history, day) });
   }
   if (carelessClutchDay !== undefined) {
     const damaged = ['PTO switch', 'Main fuse'];

@@ -27,19 +27,11 @@ function lifeOf(component: Component, unit: Unit, isKit: boolean): Life | undefi
   return special && modelsOfFamily(special.family).has(unit.model.model) ? special.life : component.life;
 }
 
-/** Small engines without a meter wear at their own, shorter scale. */
-const scaleFactor = (unit: Unit): number =>
-  unit.model.build === 'push' || unit.model.build === 'handheld'
-    ? 0.3
-    : unit.model.build === 'snow'
-      ? 0.5
-      : 1;
-
 export function createWear(unit: Unit, random: Random, lifeFactor: number): Wear {
   const draw = (component: Component, isKit: boolean): number => {
     const life = lifeOf(component, unit, isKit);
     if (!life) return Infinity;
-    return random.weibull(life.shape, life.scaleHours * lifeFactor * scaleFactor(unit), unit.frailty);
+    return random.weibull(life.shape, life.scaleHours * lifeFactor * unit.model.toughness, unit.frailty);
   };
   const slots = COMPONENTS.filter(({ builds, life }) => life && builds.includes(unit.model.build)).map(
     (component): Slot => ({ component, failsAtHours: draw(component, false) }),
