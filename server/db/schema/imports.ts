@@ -28,6 +28,8 @@ export const imports = pgTable(
     fileName: text('file_name'),
     spoolPath: text('spool_path'),
     mapping: jsonb('mapping'),
+    /** How the file was read: its headers, delimiter, decimal mark, encoding and date format. */
+    layout: jsonb('layout'),
     isDryRun: boolean('is_dry_run').notNull().default(false),
     status: text('status').notNull().default('queued'),
     analysisRunId: uuid('analysis_run_id'),

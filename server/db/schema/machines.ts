@@ -85,6 +85,7 @@ export const customers = pgTable(
     refKey: text('ref_key').notNull(),
     name: text('name'),
     phone: text('phone'),
+    changedByImportId: uuid('changed_by_import_id'),
     createdAt: createdAt(),
   },
   (t) => [

@@ -130,8 +130,12 @@ export const repairLines = pgTable(
     kind: text('kind').notNull(),
     partId: uuid('part_id'),
     partNumberText: text('part_number_text'),
+    partMakerText: text('part_maker_text'),
     description: text('description'),
     supplier: text('supplier'),
+    /** What the record itself says, whatever was made of it since; lines are matched by it. */
+    componentText: text('component_text'),
+    statedReason: text('stated_reason'),
     componentId: uuid('component_id'),
     componentOrigin: text('component_origin').notNull().default('unknown'),
     reason: text('reason').notNull().default('unknown'),
