@@ -15,5 +15,12 @@ export type Interval = { lower: number | null; upper: number | null };
 /** "The data cannot answer" is a result, with the reason in a stable code. */
 export type NotEstimable<Reason extends string = string> = { kind: 'notEstimable'; reason: Reason };
 
+/** What a reader of an estimate must be told beside it. */
+export type WarningCode =
+  /** Fewer than six failures: the estimate stands, its limits say how little it rests on. */
+  | 'fewFailures'
+  /** The proportions differ no more than chance alone would make them: one common rate is given. */
+  | 'noSpread';
+
 /** Why a part was replaced; `null` where the record does not say. */
 export type LineReason = 'failed' | 'maintenance' | 'preventive' | 'damage' | 'upgrade';

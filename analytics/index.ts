@@ -1,0 +1,27 @@
+// What every function shares
+export type { Interval, LifeObservation, LineReason, NotEstimable, WarningCode } from './types';
+export { RequirementError } from './requirement';
+
+// Life of a part
+export { bLife } from './life/b-life';
+export { fitWeibull } from './life/fit-weibull';
+export type { LimitsMethod, WeibullFit, WeibullReason } from './life/fit-weibull';
+export { kaplanMeier } from './life/kaplan-meier';
+export type { SurvivalRow } from './life/kaplan-meier';
+export { nelsonAalen } from './life/nelson-aalen';
+export type { HazardRow } from './life/nelson-aalen';
+
+// A machine that is repaired again and again
+export { meanTimeBetweenFailures } from './machine/mean-time-between-failures';
+export type { MeanTimeBetweenFailures } from './machine/mean-time-between-failures';
+
+// Rates and comparisons of counts
+export { benjaminiHochberg } from './rates/benjamini-hochberg';
+export { clopperPearsonInterval } from './rates/clopper-pearson-interval';
+export { exactBinomialLimits } from './rates/exact-binomial-limits';
+export { fisherExact } from './rates/fisher-exact';
+export type { FisherResult } from './rates/fisher-exact';
+export { poissonRateRatio } from './rates/poisson-rate-ratio';
+export type { RateRatio } from './rates/poisson-rate-ratio';
+export type { ProportionEstimate } from './rates/proportion';
+export { wilsonInterval } from './rates/wilson-interval';
