@@ -112,7 +112,11 @@ export function replace(history: History, visit: Visit, name: string, reason: Li
   visit.lines.push({ kind: 'part', part, reason, laborHours: component.laborHours });
   const hours = hoursAt(history, visit.openedDay);
   wear.install(component, hours, part.isKit);
-  if (name === 'Hour meter') history.meterZeroHours = hours;
+  if (name === 'Hour meter') {
+    const oldReading = (visit.meterHours ?? 0).toFixed(1);
+    visit.words = { ...visit.words, notes: `old meter read ${oldReading}, new meter starts at 0` };
+    history.meterZeroHours = hours;
+  }
   return part;
 }
 

@@ -71,8 +71,10 @@ function planCalendar(history: History, carelessClutchDay: number | undefined): 
   }
   for (let year = yearOf(unit.inServiceDay); year <= yearOf(world.asOfDay); year += 1) {
     const { serviceDay, springDay } = planYear(history, year);
-    history.later.push({ day: serviceDay, tell: (day) => tellService(history, day) });
-    history.later.push({ day: springDay, tell: (day) => tellSpring(history, day) });
+    if (serviceDay !== Infinity)
+      history.later.push({ day: serviceDay, tell: (day) => tellService(history, day) });
+    if (springDay !== Infinity)
+      history.later.push({ day: springDay, tell: (day) => tellSpring(history, day) });
   }
   if (carelessClutchDay !== undefined) {
     const damaged = ['PTO switch', 'Main fuse'];
