@@ -1,0 +1,82 @@
+import { AxeBuilder } from '@axe-core/playwright';
+import { chromium, type Browser, type Page } from '@playwright/test';
+import { afterAll, afterEach, beforeAll, expect, inject } from 'vitest';
+
+export const DESK = { width: 1280, height: 900 };
+export const PHONE = { width: 390, height: 844 };
+const PASSWORD = 'witness-mark-demo';
+
+type Look = { viewport?: typeof DESK; dark?: boolean };
+
+/** A real Chromium for a file of tests; whatever the console complains of fails the test in which it happened. */
+export function useBrowser() {
+  let browser: Browser;
+  const complaints: string[] = [];
+  beforeAll(async () => {
+    browser = await chromium.launch({
+      executablePath: '/usr/bin/chromium',
+      args: [
+        '--no-sandbox',
+        '--disable-gpu',
+        '--disable-quic',
+        '--no-first-run',
+        '--disable-background-networking',
+        '--disable-component-update',
+        '--disable-sync',
+      ],
+    });
+  });
+  afterAll(() => browser.close());
+  afterEach(async () => {
+    await Promise.all(browser.contexts().map((context) => context.close()));
+    expect(complaints.splice(0)).toEqual([]);
+  });
+
+  async function open({ viewport = DESK, dark = false }: Look = {}): Promise<Page> {
+    const context = await browser.newContext({
+      viewport,
+      colorScheme: dark ? 'dark' : 'light',
+      reducedMotion: 'reduce',
+      hasTouch: viewport === PHONE,
+      baseURL: inject('address'),
+      locale: 'en-US',
+    });
+    const page = await context.newPage();
+    page.setDefaultTimeout(20_000);
+    page.on('console', (message) => {
+      // The browser notes every failed request itself; those that a test provokes are its own to look at.
+      if (message.type() === 'error' && !message.text().startsWith('Failed to load resource')) {
+        complaints.push(message.text());
+      }
+    });
+    page.on('pageerror', (error) => complaints.push(error.message));
+    return page;
+  }
+
+  return {
+    open,
+    /** A page on which a person of the demo shop is signed in. */
+    async signedIn(
+      mailbox: 'owner' | 'manager' | 'tech' | 'books' | 'counter',
+      look: Look = {},
+    ): Promise<Page> {
+      const page = await open(look);
+      await page.goto('/sign-in');
+      await page.getByLabel('E-mail').fill(`${mailbox}@millrace.example`);
+      await page.getByLabel('Password', { exact: true }).fill(PASSWORD);
+      await page.getByRole('button', { name: 'Sign in' }).click();
+      await page.waitForURL((url) => url.pathname !== '/sign-in');
+      return page;
+    },
+  };
+}
+
+/** Nothing that axe knows to hinder people, by WCAG 2.2 AA. */
+export async function expectNoBarriers(page: Page): Promise<void> {
+  const { violations } = await new AxeBuilder({ page })
+    .withTags(['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'])
+    .analyze();
+  expect(
+    violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => target.join(' ')).join(' | ')}`),
+  ).toEqual([]);
+}
