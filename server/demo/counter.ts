@@ -17,6 +17,7 @@ function counterSale(random: Random, world: World, models: readonly Model[], at:
   const day = yardDay(random, world);
   const model = random.pick(models);
   const sold = SOLD_LOOSE.filter(({ builds }) => builds.includes(model.build)).slice(0, random.whole(1, 3));
+  const notes = random.pick(['over the counter', 'counter sale', 'cust installs', 'PARTS ONLY']);
   return sold.map((component) => {
     const part = world.catalog.partFor(model, component, day, random);
     const amountCents = priceThenCents(part.listCents, world.yearsAgo(day)) * component.quantity;
@@ -31,7 +32,7 @@ function counterSale(random: Random, world: World, models: readonly Model[], at:
       maker: model.maker,
       model: model.model,
       product_type: model.productType,
-      notes: random.pick(['over the counter', 'counter sale', 'cust installs', 'PARTS ONLY']),
+      notes,
       line_kind: 'part',
       part_number: part.number,
       part_maker: part.maker,

@@ -38,7 +38,7 @@ export function startHistory(unit: Unit, world: World): History {
     unit,
     world,
     random,
-    wear: createWear(unit, random, world.lifeFactor),
+    wear: createWear(unit, random),
     visits: [],
     later: [],
     freeFromDay: unit.inServiceDay,

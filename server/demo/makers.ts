@@ -73,9 +73,9 @@ const SMALL = ['Ostwick', 'OS6'] as const;
 
 /** All makers, models and engines are invented. */
 export const MODELS: readonly Model[] = [
-  buildModel('Tarnlow', 'TZ-48', 'zeroTurn', BIG_TWIN, [9, 0]),
-  buildModel('Tarnlow', 'TZ-54', 'zeroTurn', BIG_TWIN, [9, 0.01]),
-  buildModel('Tarnlow', 'TZ-60', 'zeroTurn', BIG_TWIN, [7, 0.02]),
+  buildModel('Tarnlow', 'TZ-48', 'zeroTurn', BIG_TWIN, [9, 0.06, 2.5]),
+  buildModel('Tarnlow', 'TZ-54', 'zeroTurn', BIG_TWIN, [9, 0.08, 2.5]),
+  buildModel('Tarnlow', 'TZ-60', 'zeroTurn', BIG_TWIN, [7, 0.1, 2.5]),
   buildModel('Tarnlow', 'TL-42', 'tractor', TWIN, [7, 0]),
   buildModel('Tarnlow', 'TL-46', 'tractor', TWIN, [8, 0]),
   buildModel('Oakrill', 'R52C', 'zeroTurn', BIG_TWIN, [6, 0.55, 8]),

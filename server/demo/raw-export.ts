@@ -38,7 +38,6 @@ type RawRow = Record<(typeof RAW_COLUMNS)[number], string>;
 const YEARS = 2;
 const MODEL_COUNT = 290;
 const MACHINES = 2250;
-const LIFE_FACTOR = 0.6;
 const FIRST_TICKET = 7000;
 
 /** m/d/yyyy, without leading zeros. */
@@ -107,7 +106,7 @@ function ticketRows({ visit }: Numbered, at: number, world: World, random: Rando
 export function rawExport({ asOf, seed = 4600 }: SimulationOptions): string {
   const asOfDay = dayOf(asOf);
   const firstDay = asOfDay - Math.round(YEARS * 365.25);
-  const world = createWorld(seed, asOfDay, firstDay, LIFE_FACTOR);
+  const world = createWorld(seed, asOfDay, firstDay);
   const models = longTailModels(createRandom(seed, 'long tail'), MODEL_COUNT);
   const plan = { models, registered: MACHINES, walkIns: 0, firstDay, asOfDay, plateGone: 0.5 };
   const fleet = createFleet(createRandom(seed, 'raw fleet'), plan);

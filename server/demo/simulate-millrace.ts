@@ -47,7 +47,6 @@ export interface Millrace {
 const SEASONS = 6;
 const REGISTERED_UNITS = 1500;
 const WALK_INS = 60;
-const LIFE_FACTOR = 0.62;
 /** Clutches of the bad month that were sent home with a new fuse. */
 const CARELESS_CLUTCHES = 26;
 
@@ -69,7 +68,7 @@ function pickCareless(fleet: readonly Unit[], asOfDay: number, seed: number): Ma
 export function simulateMillrace({ asOf, seed = 4600 }: SimulationOptions): Millrace {
   const asOfDay = dayOf(asOf);
   const firstDay = asOfDay - Math.round(SEASONS * 365.25);
-  const world = createWorld(seed, asOfDay, firstDay, LIFE_FACTOR);
+  const world = createWorld(seed, asOfDay, firstDay);
   const plan = {
     models: MODELS,
     registered: REGISTERED_UNITS,

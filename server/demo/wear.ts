@@ -21,17 +21,18 @@ export interface Wear {
   suspend(component: Component): void;
 }
 
+/** A family's own lives are as they are on its machines; the others stretch with how the machine is built. */
 function lifeOf(component: Component, unit: Unit, isKit: boolean): Life | undefined {
   if (isKit) return CLUTCH_SUPERSESSION.newLife;
-  const special = component.familyLife;
-  return special && modelsOfFamily(special.family).has(unit.model.model) ? special.life : component.life;
+  const { familyLife, life } = component;
+  if (familyLife && modelsOfFamily(familyLife.family).has(unit.model.model)) return familyLife.life;
+  return life && { shape: life.shape, scaleHours: life.scaleHours * unit.model.toughness };
 }
 
-export function createWear(unit: Unit, random: Random, lifeFactor: number): Wear {
+export function createWear(unit: Unit, random: Random): Wear {
   const draw = (component: Component, isKit: boolean): number => {
     const life = lifeOf(component, unit, isKit);
-    if (!life) return Infinity;
-    return random.weibull(life.shape, life.scaleHours * lifeFactor * unit.model.toughness, unit.frailty);
+    return life ? random.weibull(life.shape, life.scaleHours, unit.frailty) : Infinity;
   };
   const slots = COMPONENTS.filter(({ builds, life }) => life && builds.includes(unit.model.build)).map(
     (component): Slot => ({ component, failsAtHours: draw(component, false) }),

@@ -10,18 +10,15 @@ export interface World {
   asOfDay: number;
   clocks: Record<Season, SeasonClock>;
   catalog: Catalog;
-  /** Longer than 1 makes every part last longer. */
-  lifeFactor: number;
   yearsAgo(day: number): number;
 }
 
-export function createWorld(seed: number, asOfDay: number, firstDay: number, lifeFactor: number): World {
+export function createWorld(seed: number, asOfDay: number, firstDay: number): World {
   const clock = (season: Season): SeasonClock => seasonClock(season, firstDay - 1000, asOfDay + 120);
   return {
     seed,
     firstDay,
     asOfDay,
-    lifeFactor,
     clocks: { mowing: clock('mowing'), snow: clock('snow'), allYear: clock('allYear') },
     catalog: createCatalog(Math.round((firstDay + asOfDay) / 2)),
     yearsAgo: (day) => Math.max(0, asOfDay - day) / 365.25,
