@@ -11,6 +11,7 @@ import { AppError } from './http/errors';
 import { problemHandler } from './http/problem';
 import { mountRoutes } from './http/route';
 import { allRoutes } from './resources/index';
+import { docsPage } from './resources/openapi/routes';
 
 const CLIENT = path.resolve(import.meta.dirname, '../dist/client');
 
@@ -61,8 +62,10 @@ export function createApp(deps: Deps): express.Express {
   // The batch route takes bodies up to 32 MB; every other body is small.
   api.use('/repairs/batch', express.json({ limit: '32mb' }));
   api.use(express.json({ limit: '1mb' }), cookieParser(), refuseForeignOrigin(deps), authenticate(deps));
-  mountRoutes(api, allRoutes(deps));
+  const routes = allRoutes(deps);
+  mountRoutes(api, routes);
   app.use('/api/v1', api);
+  app.get('/api/docs', docsPage(routes));
   app.use('/api', () => {
     throw new AppError('missing', 'There is no such address in this API.');
   });

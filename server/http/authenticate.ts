@@ -87,7 +87,7 @@ async function findKey(database: Database, key: string): Promise<KeyActor | unde
 const membershipRow = z.object({ shop_id: z.string(), shop_name: z.string(), role: z.custom<Role>() });
 
 /** The shops a person belongs to; asked before any shop is known. */
-export async function membershipsOf(database: Database, userId: string) {
+export async function membershipsOf(database: Pick<Database, 'execute'>, userId: string) {
   const { rows } = await database.execute(sql`SELECT * FROM memberships_of_user(${userId})`);
   return z
     .array(membershipRow)

@@ -1,5 +1,6 @@
 import type PgBoss from 'pg-boss';
 import type { Deps } from '../deps';
+import { deliverMail } from '../mail/deliver';
 import type { JobName, JobPayloads } from './queue';
 
 export type WorkerDeps = Deps & {
@@ -10,7 +11,7 @@ export type WorkerDeps = Deps & {
 
 type Handlers = { [Name in JobName]: (deps: WorkerDeps, payload: JobPayloads[Name]) => Promise<void> };
 
-const handlers: Partial<Handlers> = {};
+const handlers: Partial<Handlers> = { mail: deliverMail };
 
 /** Starts working off the queues; the answer wakes the worker of a queue at once. */
 export async function startWorkers(deps: WorkerDeps): Promise<(name: JobName) => void> {

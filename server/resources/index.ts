@@ -1,11 +1,34 @@
 import type { Deps } from '../deps';
 import type { Route } from '../http/route';
+import { auditRoutes } from './audit-log/routes';
+import { familyRoutes } from './families/routes';
+import { keyRoutes } from './keys/routes';
+import { openApiRoutes } from './openapi/routes';
+import { outboxRoutes } from './outbox/routes';
 import { partRoutes } from './parts/routes';
+import { passwordRoutes } from './password/routes';
+import { peopleRoutes } from './people/routes';
 import { repairRoutes } from './repairs/routes';
 import { sessionRoutes } from './session/routes';
+import { shopRoutes } from './shop/routes';
+import { technicianRoutes } from './technicians/routes';
 import { unitRoutes } from './units/routes';
 
 /** Every route of the API: a new resource adds its line here. */
 export function allRoutes(deps: Deps): Route[] {
-  return [...sessionRoutes(deps), ...repairRoutes(deps), ...unitRoutes(deps), ...partRoutes(deps)];
+  const routes = [
+    ...sessionRoutes(deps),
+    ...repairRoutes(deps),
+    ...unitRoutes(deps),
+    ...partRoutes(deps),
+    ...peopleRoutes(deps),
+    ...keyRoutes(deps),
+    ...shopRoutes(deps),
+    ...technicianRoutes(deps),
+    ...familyRoutes(deps),
+    ...outboxRoutes(deps),
+    ...auditRoutes(deps),
+    ...passwordRoutes(deps),
+  ];
+  return [...routes, ...openApiRoutes(routes)];
 }

@@ -1,6 +1,7 @@
 import { and, desc, eq, gt, isNull, sql, type SQL } from 'drizzle-orm';
 import { z } from 'zod';
-import type { Database, Transaction } from '../../db/client';
+import type { Database } from '../../db/client';
+import { instantKey } from '../../db/instant-key';
 import { sessions } from '../../db/schema/index';
 import type { Deps } from '../../deps';
 import { requireUser, type Actor } from '../../http/actor';
@@ -15,12 +16,12 @@ export async function listSessions(deps: Deps, actor: Actor, page: { limit: numb
   const { userId, sessionId } = requireUser(actor);
   const now = deps.now();
   const after = decodeCursor(page.cursor, cursorKey);
-  const createdAt = sql<Date>`date_trunc('milliseconds', ${sessions.createdAt})`;
   const rows = await deps.database
     .select({
       id: sessions.id,
       userAgent: sessions.userAgent,
       createdAt: sessions.createdAt,
+      key: instantKey(sessions.createdAt),
       lastSeenAt: sessions.lastSeenAt,
     })
     .from(sessions)
@@ -30,12 +31,12 @@ export async function listSessions(deps: Deps, actor: Actor, page: { limit: numb
         isNull(sessions.revokedAt),
         gt(sessions.expiresAt, now),
         gt(sessions.lastSeenAt, new Date(now.getTime() - IDLE_HOURS * 3_600_000)),
-        after && sql`(${createdAt}, ${sessions.id}) < (${after[0]}::timestamptz, ${after[1]}::uuid)`,
+        after && sql`(${sessions.createdAt}, ${sessions.id}) < (${after[0]}::timestamptz, ${after[1]}::uuid)`,
       ),
     )
-    .orderBy(desc(createdAt), desc(sessions.id))
+    .orderBy(desc(sessions.createdAt), desc(sessions.id))
     .limit(page.limit + 1);
-  const { data, nextCursor } = pageOf(rows, page.limit, (row) => [row.createdAt.toISOString(), row.id]);
+  const { data, nextCursor } = pageOf(rows, page.limit, (row) => [row.key, row.id]);
   return {
     data: data.map((row) => ({
       id: row.id,
@@ -51,15 +52,21 @@ export async function listSessions(deps: Deps, actor: Actor, page: { limit: numb
 /** Ends the session that is asking, or another one of the same person. */
 export async function endOneSession(deps: Deps, actor: Actor, id?: string): Promise<void> {
   const { userId, sessionId } = requireUser(actor);
-  const ended = await endSessions(deps.database, deps.now(), userId, eq(sessions.id, id ?? sessionId));
+  const ended = await endSessionsOf(deps.database, deps.now(), userId, eq(sessions.id, id ?? sessionId));
   if (ended === 0) throw missing('session');
 }
 
 export async function endEverySession(deps: Deps, actor: Actor): Promise<void> {
-  await endSessions(deps.database, deps.now(), requireUser(actor).userId);
+  await endSessionsOf(deps.database, deps.now(), requireUser(actor).userId);
 }
 
-async function endSessions(database: Database | Transaction, now: Date, userId: string, which?: SQL) {
+/** Ends a person's sessions: all, or those that a condition picks. Answers how many. */
+export async function endSessionsOf(
+  database: Pick<Database, 'update'>,
+  now: Date,
+  userId: string,
+  which?: SQL,
+): Promise<number> {
   const ended = await database
     .update(sessions)
     .set({ revokedAt: now })
