@@ -1,6 +1,7 @@
 import type PgBoss from 'pg-boss';
 import type { Deps } from '../deps';
 import { deliverMail } from '../mail/deliver';
+import { handleAnalysis } from './analysis/handle';
 import type { JobName, JobPayloads } from './queue';
 
 export type WorkerDeps = Deps & {
@@ -11,7 +12,7 @@ export type WorkerDeps = Deps & {
 
 type Handlers = { [Name in JobName]: (deps: WorkerDeps, payload: JobPayloads[Name]) => Promise<void> };
 
-const handlers: Partial<Handlers> = { mail: deliverMail };
+const handlers: Partial<Handlers> = { analysis: handleAnalysis, mail: deliverMail };
 
 /** Starts working off the queues; the answer wakes the worker of a queue at once. */
 export async function startWorkers(deps: WorkerDeps): Promise<(name: JobName) => void> {

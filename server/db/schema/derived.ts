@@ -43,6 +43,28 @@ export const analysisRuns = pgTable(
   ],
 );
 
+/** What a repair says about trouble: whether it can come back (else why not), and what was in trouble. Derived. */
+export const repairFacts = pgTable(
+  'repair_facts',
+  {
+    shopId: uuid('shop_id').notNull(),
+    repairId: uuid('repair_id').notNull(),
+    /** not_a_repair, unidentified, maintenance_only; null where it counts in rates. */
+    leftOut: text('left_out'),
+    troubleComponentIds: uuid('trouble_component_ids').array().notNull(),
+    systems: text('systems').array().notNull(),
+  },
+  (t) => [
+    primaryKey({ columns: [t.shopId, t.repairId] }),
+    foreignKey({
+      columns: [t.shopId, t.repairId],
+      foreignColumns: [repairs.shopId, repairs.id],
+      name: 'repair_facts_repair_fk',
+    }).onDelete('cascade'),
+    check('repair_facts_left_out', sql`${t.leftOut} IN ('not_a_repair', 'unidentified', 'maintenance_only')`),
+  ],
+);
+
 /** One installation of one component in one unit, on both clocks. Derived; rebuilt by every analysis. */
 export const partLives = pgTable(
   'part_lives',

@@ -1,6 +1,11 @@
 import { and, asc, eq, isNotNull } from 'drizzle-orm';
 import { dayNumber } from '../../../analytics/records/day-number';
-import type { RecordComponent, RecordLine, RecordRepair, RecordUnit } from '../../../analytics/records/record-types';
+import type {
+  RecordComponent,
+  RecordLine,
+  RecordRepair,
+  RecordUnit,
+} from '../../../analytics/records/record-types';
 import type { LineReason } from '../../../analytics/types';
 import type { Transaction } from '../../db/client';
 import {
@@ -31,7 +36,10 @@ const ENGINE_SYSTEMS = new Set(['engine', 'ignition']);
 
 export async function loadRecords(tx: Transaction): Promise<ShopRecords> {
   const shopRepairs = await loadRepairs(tx);
-  const lastDay = shopRepairs.reduce<number | null>((last, { closedDay }) => Math.max(last ?? closedDay, closedDay), null);
+  const lastDay = shopRepairs.reduce<number | null>(
+    (last, { closedDay }) => Math.max(last ?? closedDay, closedDay),
+    null,
+  );
   return {
     units: await loadUnits(tx),
     repairs: shopRepairs,

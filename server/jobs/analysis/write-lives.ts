@@ -45,7 +45,10 @@ function toRow(life: PartLife) {
 }
 
 /** Notes on each repair why its meter reading is not used; rows that say so already are left alone. */
-export async function writeMeterFaults(tx: Transaction, meters: ReadonlyMap<string, JudgedMeter>): Promise<number> {
+export async function writeMeterFaults(
+  tx: Transaction,
+  meters: ReadonlyMap<string, JudgedMeter>,
+): Promise<number> {
   const faults = [...meters].flatMap(([id, { fault }]) => (fault === null ? [] : [{ id, fault }]));
   await tx.execute(sql`
     WITH judged AS (SELECT * FROM json_to_recordset(${JSON.stringify(faults)}::json) AS fault(id uuid, fault text))
