@@ -71,8 +71,8 @@ export type FindingSummary = z.infer<typeof findingSummary>;
 
 export const findingEpisode = z.strictObject({
   unit: named,
-  /** Does it speak for the finding or against it? */
-  speaks: z.enum(['for', 'against']),
+  /** Does it speak for the finding or against it? Neutral: both at one visit, or too early to tell. */
+  speaks: z.enum(['for', 'against', 'neutral']),
   why: z.string(),
   visits: z.array(
     z.strictObject({

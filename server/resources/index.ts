@@ -1,10 +1,12 @@
 import type { Deps } from '../deps';
 import type { Route } from '../http/route';
 import { auditRoutes } from './audit-log/routes';
+import { cascadeRoutes } from './cascades/routes';
 import { familyRoutes } from './families/routes';
 import { keyRoutes } from './keys/routes';
 import { openApiRoutes } from './openapi/routes';
 import { outboxRoutes } from './outbox/routes';
+import { partLifeRoutes } from './part-life/routes';
 import { partRoutes } from './parts/routes';
 import { passwordRoutes } from './password/routes';
 import { peopleRoutes } from './people/routes';
@@ -21,6 +23,8 @@ export function allRoutes(deps: Deps): Route[] {
     ...repairRoutes(deps),
     ...unitRoutes(deps),
     ...partRoutes(deps),
+    ...partLifeRoutes(deps),
+    ...cascadeRoutes(deps),
     ...peopleRoutes(deps),
     ...keyRoutes(deps),
     ...shopRoutes(deps),

@@ -20,7 +20,7 @@ afterAll(() => house.close());
 describe('machines', () => {
   it('are listed to the end in one order, with their repairs and last reading', async () => {
     const model = await rows.model('LT-9');
-    const units = [];
+    const units: string[] = [];
     for (let at = 0; at < 5; at++)
       units.push(
         await rows.unit(model, {

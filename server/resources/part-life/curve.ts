@@ -1,0 +1,42 @@
+import { kaplanMeier, type LifeObservation } from '../../../analytics';
+import type { PartLife } from '../../../shared/parts';
+
+const MOST_ROWS = 400;
+const TICKS = 6;
+
+/** The life curve; a long one is thinned for the wire, every row that is sent being exact. */
+export function curveOf(observations: readonly LifeObservation[]): PartLife['kaplanMeier'] {
+  return thinned(kaplanMeier(observations), MOST_ROWS);
+}
+
+/** Evenly spaced rows, the first and the last among them. */
+export function thinned<Row>(rows: readonly Row[], most: number): Row[] {
+  if (rows.length <= most) return [...rows];
+  const step = (rows.length - 1) / (most - 1);
+  return Array.from({ length: most }, (_, at) => rows[Math.round(at * step)]).filter(
+    (row) => row !== undefined,
+  );
+}
+
+/** How many were under observation at a few round ages. */
+export function numbersAtRisk(observations: readonly LifeObservation[]): PartLife['atRiskAt'] {
+  const longest = observations.reduce((most, { time }) => Math.max(most, time), 0);
+  if (longest === 0) return [];
+  const step = roundStep(longest / TICKS);
+  const ticks = Array.from({ length: Math.floor(longest / step) + 1 }, (_, at) => at * step);
+  return ticks.map((time) => ({
+    time,
+    atRisk: observations.reduce(
+      (sum, { time: exit, entry = 0, weight = 1 }) =>
+        // At 0 stand those that were seen from new.
+        (time === 0 ? entry === 0 : entry < time && time <= exit) ? sum + weight : sum,
+      0,
+    ),
+  }));
+}
+
+/** The smallest of 1, 2, 5 × 10ⁿ that is not less. */
+function roundStep(least: number): number {
+  const power = 10 ** Math.floor(Math.log10(least));
+  return [1, 2, 5, 10].map((factor) => factor * power).find((step) => step >= least) ?? least;
+}
