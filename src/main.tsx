@@ -14,8 +14,8 @@ const router = createRouter();
 
 onSignedOut(() => {
   const { pathname, search } = router.state.location;
-  queryClient.clear();
-  void router.navigate(paths.signIn(`${pathname}${search}`), { replace: true });
+  // By loading anew: nothing that was shown stays in memory.
+  location.replace(paths.signIn(`${pathname}${search}`));
 });
 
 const root = document.getElementById('root');

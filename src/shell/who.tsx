@@ -1,34 +1,25 @@
-import { useMutation, useQueryClient } from '@tanstack/react-query';
-import { useNavigate } from 'react-router';
+import { useMutation } from '@tanstack/react-query';
 import { ROLE_NAMES } from '../../shared/roles';
 import type { Session } from '../../shared/session';
 import { Button } from '../components/ui/button';
 import { Select } from '../components/ui/select';
 import { notify } from '../components/ui/toast-store';
 import { apiSend } from '../lib/api';
-import { sessionQuery, useSession } from '../lib/session';
+import { useSession } from '../lib/session';
 import { paths } from '../paths';
 
 /** Which shop, which person, in which role; another shop; out. */
 export function Who() {
   const { user, shop, shops } = useSession();
-  const client = useQueryClient();
-  const navigate = useNavigate();
+  // Both leave by loading anew: nothing of the shop or the person stays in memory.
   const signOut = useMutation({
     mutationFn: () => apiSend('DELETE', '/session'),
-    onSuccess: async () => {
-      await navigate(paths.signIn());
-      client.clear();
-    },
+    onSuccess: () => location.assign(paths.signIn()),
     onError: (error) => notify(error.message, 'failed'),
   });
   const goTo = useMutation({
     mutationFn: (shopId: string) => apiSend<Session>('PATCH', '/session', { shopId }),
-    onSuccess: async (session) => {
-      client.clear();
-      client.setQueryData(sessionQuery.queryKey, session);
-      await navigate(paths.month());
-    },
+    onSuccess: () => location.assign(paths.month()),
     onError: (error) => notify(error.message, 'failed'),
   });
   return (

@@ -1,8 +1,13 @@
 import { RouteError } from '../../components/ui/error-panel';
-import { Page } from '../../components/ui/page';
+import { Door } from '../../features/account/door';
+import { ForgotForm } from '../../features/account/forgot-form';
 
 export const ErrorBoundary = RouteError;
 
 export function Component() {
-  return <Page title="Forgot" />;
+  return (
+    <Door title="Forgot the password" intro="You get a link by e-mail to set a new one.">
+      <ForgotForm />
+    </Door>
+  );
 }

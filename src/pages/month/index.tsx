@@ -1,8 +1,78 @@
+import { useSuspenseQuery } from '@tanstack/react-query';
+import { redirect, useSearchParams, type LoaderFunctionArgs } from 'react-router';
 import { RouteError } from '../../components/ui/error-panel';
+import { MonthPicker } from '../../components/ui/month-picker';
 import { Page } from '../../components/ui/page';
+import { Button } from '../../components/ui/button';
+import { Drivers } from '../../features/month/drivers';
+import { byTheDoor, MonthFigures } from '../../features/month/month-figures';
+import { MonthPicture } from '../../features/month/month-picture';
+import { MonthSentence } from '../../features/month/month-sentence';
+import { NeedsDoing } from '../../features/month/needs-doing';
+import { monthReviewQuery } from '../../features/month/queries';
+import { queryClient } from '../../lib/query-client';
+import { can, sessionQuery, useCan, useFormats } from '../../lib/session';
+import { paths } from '../../paths';
+
+const monthOf = (search: URLSearchParams) => search.get('month') ?? undefined;
+
+export async function loader({ request }: LoaderFunctionArgs) {
+  const { searchParams } = new URL(request.url);
+  const session = await queryClient.query({ ...sessionQuery, staleTime: 'static' });
+  // The counter has no figures to review: repairs are what they come for.
+  if (!can(session.shop.role, 'rates')) throw redirect(paths.repairs());
+  await queryClient.query({ ...monthReviewQuery(monthOf(searchParams)), staleTime: 'static' });
+  return null;
+}
 
 export const ErrorBoundary = RouteError;
 
 export function Component() {
-  return <Page title="This month" />;
+  const [search, setSearch] = useSearchParams();
+  const { data: review } = useSuspenseQuery(monthReviewQuery(monthOf(search)));
+  const formats = useFormats();
+  const { can: may } = useCan();
+  const months = review.rows.flatMap(({ month }) => (month === null ? [] : [month]));
+  const isLatest = monthOf(search) === undefined;
+
+  return (
+    <Page
+      title="This month"
+      pickers={
+        review.month !== null && (
+          <MonthPicker
+            months={months}
+            value={review.month}
+            format={formats.month}
+            onChange={(month) => setSearch({ month }, { preventScrollReset: true })}
+          />
+        )
+      }
+      aside={
+        review.repairsInAll > 0 &&
+        `${isLatest && review.month !== null ? 'the latest that can be judged; ' : ''}${byTheDoor(review, formats)}`
+      }
+      actions={
+        <Button look="text" onClick={() => print()}>
+          Print
+        </Button>
+      }
+      finding={<MonthSentence review={review} formats={formats} mayImport={may('imports', 'write')} />}
+    >
+      {review.rows.length > 0 && (
+        <>
+          <div className="grid items-start gap-6 desk:grid-cols-[minmax(0,1fr)_292px]">
+            <div className="order-2 desk:order-1">
+              <MonthPicture review={review} formats={formats} />
+            </div>
+            <div className="order-1 flex flex-col gap-6 desk:order-2">
+              <NeedsDoing todos={review.todos} />
+              <MonthFigures review={review} formats={formats} />
+            </div>
+          </div>
+          <Drivers review={review} formats={formats} />
+        </>
+      )}
+    </Page>
+  );
 }

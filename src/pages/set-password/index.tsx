@@ -1,8 +1,13 @@
 import { RouteError } from '../../components/ui/error-panel';
-import { Page } from '../../components/ui/page';
+import { Door } from '../../features/account/door';
+import { SetPasswordForm } from '../../features/account/set-password-form';
 
 export const ErrorBoundary = RouteError;
 
 export function Component() {
-  return <Page title="Set a password" />;
+  return (
+    <Door title="Set your password">
+      <SetPasswordForm />
+    </Door>
+  );
 }

@@ -1,0 +1,22 @@
+/** What hover and focus say of one point: a heading, then lines with their counts. */
+export type Tip = { heading: string; lines: readonly string[] };
+
+type Props = { active?: boolean; payload?: readonly { payload?: unknown }[] };
+
+/** For `<Tooltip content={<TipContent />} />`: each datum of the chart carries its `tip`. */
+export function TipContent({ active, payload }: Props) {
+  const datum = payload?.[0]?.payload;
+  if (!active || !hasTip(datum)) return null;
+  return (
+    <div className="max-w-[20rem] rounded-bench border border-edge bg-sheet px-3 py-2 text-sm text-ink shadow-bench">
+      <p className="font-heading">{datum.tip.heading}</p>
+      {datum.tip.lines.map((line) => (
+        <p key={line}>{line}</p>
+      ))}
+    </div>
+  );
+}
+
+function hasTip(datum: unknown): datum is { tip: Tip } {
+  return typeof datum === 'object' && datum !== null && 'tip' in datum;
+}
