@@ -6,12 +6,25 @@ export { RequirementError } from './requirement';
 export { bLife } from './life/b-life';
 export { fitWeibull } from './life/fit-weibull';
 export type { LimitsMethod, WeibullFit, WeibullReason } from './life/fit-weibull';
+export { compareWeibull } from './life/compare-weibull';
+export type { WeibullComparison } from './life/compare-weibull';
+export { hazardRatio } from './life/hazard-ratio';
+export type { HazardRatio } from './life/hazard-ratio';
 export { kaplanMeier } from './life/kaplan-meier';
 export type { SurvivalRow } from './life/kaplan-meier';
+export { logRankTest } from './life/log-rank-test';
+export type { LogRankTest } from './life/log-rank-test';
 export { nelsonAalen } from './life/nelson-aalen';
 export type { HazardRow } from './life/nelson-aalen';
 
 // A machine that is repaired again and again
+export type { EventSeries } from './machine/event-series';
+export { fitPowerLaw } from './machine/fit-power-law';
+export type { PowerLawFit } from './machine/fit-power-law';
+export { laplaceTest } from './machine/laplace-test';
+export type { LaplaceTest } from './machine/laplace-test';
+export { meanCumulativeFunction } from './machine/mean-cumulative-function';
+export type { MeanCumulativeRow, RepairHistory } from './machine/mean-cumulative-function';
 export { meanTimeBetweenFailures } from './machine/mean-time-between-failures';
 export type { MeanTimeBetweenFailures } from './machine/mean-time-between-failures';
 
@@ -24,4 +37,8 @@ export type { FisherResult } from './rates/fisher-exact';
 export { poissonRateRatio } from './rates/poisson-rate-ratio';
 export type { RateRatio } from './rates/poisson-rate-ratio';
 export type { ProportionEstimate } from './rates/proportion';
+export { proportionChart } from './rates/proportion-chart';
+export type { ChartPoint, ProportionChart } from './rates/proportion-chart';
+export { shrinkProportions } from './rates/shrink-proportions';
+export type { ShrunkenProportions } from './rates/shrink-proportions';
 export { wilsonInterval } from './rates/wilson-interval';

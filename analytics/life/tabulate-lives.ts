@@ -1,5 +1,6 @@
 import { requireThat } from '../requirement';
 import type { LifeObservation } from '../types';
+import { AgeIndex } from './age-index';
 
 /** Lives added up by age, in rising order of age: all that the likelihood and the risk sets need. */
 export type LifeTable = {
@@ -23,22 +24,17 @@ export type LifeTable = {
  * a weight is negative
  */
 export function tabulateLives(observations: readonly LifeObservation[], functionName: string): LifeTable {
-  const rowOfAge = new Map<number, number>();
+  const index = new AgeIndex();
   const failed: number[] = [];
   const censored: number[] = [];
   const entered: number[] = [];
-  const rowAt = (age: number): number => {
-    const known = rowOfAge.get(age);
-    if (known !== undefined) return known;
-    const row = rowOfAge.size;
-    rowOfAge.set(age, row);
-    failed.push(0);
-    censored.push(0);
-    entered.push(0);
-    return row;
-  };
   const add = (column: number[], age: number, weight: number): void => {
-    const row = rowAt(age);
+    const row = index.rowOf(age);
+    if (row === failed.length) {
+      failed.push(0);
+      censored.push(0);
+      entered.push(0);
+    }
     column[row] = (column[row] ?? 0) + weight;
   };
   for (const life of observations) {
@@ -54,18 +50,18 @@ export function tabulateLives(observations: readonly LifeObservation[], function
     add(hasFailed ? failed : censored, time, weight);
     if (entry > 0) add(entered, entry, weight);
   }
-  return sortTable(rowOfAge, failed, censored, entered);
+  return sortTable(index, failed, censored, entered);
 }
 
-function sortTable(
-  rowOfAge: ReadonlyMap<number, number>,
-  failed: number[],
-  censored: number[],
-  entered: number[],
-): LifeTable {
-  const ages = Float64Array.from(rowOfAge.keys()).sort();
-  const rows = Uint32Array.from(ages, (age) => rowOfAge.get(age) ?? 0);
-  const pick = (column: number[]): Float64Array => Float64Array.from(rows, (row) => column[row] ?? 0);
+function sortTable(index: AgeIndex, failed: number[], censored: number[], entered: number[]): LifeTable {
+  const ages = index.ages().sort();
+  const rows = new Uint32Array(ages.length);
+  for (let i = 0; i < ages.length; i++) rows[i] = index.rowOf(ages[i] ?? 0);
+  const pick = (column: number[]): Float64Array => {
+    const picked = new Float64Array(rows.length);
+    for (let i = 0; i < rows.length; i++) picked[i] = column[rows[i] ?? 0] ?? 0;
+    return picked;
+  };
   const table = { ages, failed: pick(failed), censored: pick(censored), entered: pick(entered) };
   const failures = sum(table.failed);
   return { ...table, failures, observations: failures + sum(table.censored) };
@@ -77,24 +73,38 @@ function sum(column: Float64Array): number {
   return total;
 }
 
-/** Who is at risk at each age (entry < age ≤ exit), for the ages at which someone failed. */
-export type RiskRow = { time: number; atRisk: number; failures: number };
-
-export function riskRows(table: LifeTable): RiskRow[] {
+/** Who was at risk and who failed at given ages in rising order: at risk when entry < age ≤ exit. */
+export function riskAt(
+  table: LifeTable,
+  times: Float64Array,
+): { atRisk: Float64Array; failures: Float64Array } {
   const { ages, failed, censored, entered } = table;
-  const rows: RiskRow[] = [];
+  const atRisk = new Float64Array(times.length);
+  const failures = new Float64Array(times.length);
+  let row = ages.length - 1;
   let exitsAhead = 0;
   let entriesAhead = 0;
   // Backwards, so that without late entries the last risk sets are sums and not differences.
-  for (let i = ages.length - 1; i >= 0; i--) {
-    const failures = failed[i] ?? 0;
-    exitsAhead += failures + (censored[i] ?? 0);
-    entriesAhead += entered[i] ?? 0;
-    if (failures === 0) continue;
-    const others = exitsAhead - entriesAhead - failures;
+  for (let i = times.length - 1; i >= 0; i--) {
+    const time = times[i] ?? 0;
+    for (; row >= 0 && (ages[row] ?? 0) >= time; row--) {
+      exitsAhead += (failed[row] ?? 0) + (censored[row] ?? 0);
+      entriesAhead += entered[row] ?? 0;
+      if (ages[row] === time) failures[i] = failed[row] ?? 0;
+    }
+    const failing = failures[i] ?? 0;
+    const others = exitsAhead - entriesAhead - failing;
     // A rounding error of fractional weights must not stand for a life.
-    const atRisk = others > 1e-12 * exitsAhead ? others + failures : failures;
-    rows.push({ time: ages[i] ?? 0, atRisk, failures });
+    atRisk[i] = others > 1e-12 * exitsAhead ? others + failing : failing;
   }
-  return rows.reverse();
+  return { atRisk, failures };
+}
+
+export type RiskRow = { time: number; atRisk: number; failures: number };
+
+/** The same at the ages at which someone failed. */
+export function riskRows(table: LifeTable): RiskRow[] {
+  const times = table.ages.filter((_, i) => (table.failed[i] ?? 0) > 0);
+  const { atRisk, failures } = riskAt(table, times);
+  return Array.from(times, (time, i) => ({ time, atRisk: atRisk[i] ?? 0, failures: failures[i] ?? 0 }));
 }
