@@ -33,8 +33,8 @@ const CLUTCH_FAMILY = 'Tarnlow 38-series clutch';
 export const CLUTCH_SUPERSESSION = {
   oldNumber: '38-2114',
   newNumber: '38-2290',
-  oldLife: { shape: 1.9, scaleHours: 540 },
-  newLife: { shape: 2, scaleHours: 1860 },
+  oldLife: { shape: 1.9, scaleHours: 590 },
+  newLife: { shape: 2, scaleHours: 2100 },
   fitmentNote:
     'Kit 38-2290 replaces 38-2114. Machines with the two-blade plug need the connector jumper lead in the kit. The key is built into the rotor bore: leave the loose key out. A flat stabilizer bar takes the place of the round one that wore its slot. Check the air gap at three slots and burnish before use.',
 } as const;

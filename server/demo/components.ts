@@ -90,7 +90,7 @@ export const COMPONENTS: readonly Component[] = [
     ['PTO-10', 1.2, 236, 278],
     ['CLUTCH, ELECTRIC PTO', 'PTO CLUTCH', 'CLUTCH ASSY ELEC'],
     {
-      ...inFamily('Tarnlow 38-series clutch', 1.9, 540),
+      ...inFamily('Tarnlow 38-series clutch', 1.9, 590),
       seenWorn: 0.25,
       numbered: 'model',
       cure: { work: 'adjusted', share: 0.16 },
@@ -122,7 +122,7 @@ export const COMPONENTS: readonly Component[] = [
     ['ELE-30', 0.7, 46, 68],
     ['REGULATOR, VOLTAGE', 'REG/RECTIFIER'],
     {
-      ...inFamily('Dunmarch DV23 engine', 2, 530),
+      ...inFamily('Dunmarch DV23 engine', 2, 560),
       seenWorn: 0.4,
       cure: { work: 'cleaned', share: 0.06 },
     },
@@ -140,7 +140,7 @@ export const COMPONENTS: readonly Component[] = [
     'Battery',
     'charging',
     BATTERY,
-    [2, 930],
+    [2, 1300],
     ['ELE-10', 0.3, 62, 88],
     ['BATTERY, 12V U1', 'BATTERY U1R 12V'],
     { numbered: 'universal', seenWorn: 0.75, cure: { work: 'tested_good', share: 0.05 } },
@@ -153,7 +153,7 @@ export const COMPONENTS: readonly Component[] = [
     ['ELE-15', 0.6, 14, 24],
     ['CABLE, BATTERY POS', 'BATT CABLE', 'CABLE, BATTERY NEG'],
     {
-      ...inFamily('Greyhollow 42/46 deck', 1.9, 420),
+      ...inFamily('Greyhollow 42/46 deck', 1.9, 540),
       seenWorn: 0.25,
       cure: { work: 'cleaned', share: 0.12 },
     },

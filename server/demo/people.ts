@@ -44,7 +44,7 @@ export const TECHNICIANS: readonly Technician[] = [
     findsCause: 0.5,
     yearsAgo: [99, 2.2],
   },
-  { name: 'Casey Wendt', spellings: ['Casey'], location: 'Route 9', findsCause: 0.74, yearsAgo: [99, 0] },
+  { name: 'Casey Wendt', spellings: ['Casey'], location: 'Route 9', findsCause: 0.75, yearsAgo: [99, 0] },
   {
     name: 'Joan Pell',
     spellings: ['J Pell', 'Joan'],
