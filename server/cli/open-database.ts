@@ -27,3 +27,11 @@ export async function openForCommand(say: (line: string) => void): Promise<Comma
 
 /** Says something to the person at the shell, apart from what the command answers. */
 export const sayToPerson = (line: string) => void process.stderr.write(`${line}\n`);
+
+/** Runs a command to its end; what goes wrong is said in one line, and the exit code is 2. */
+export function runCommand(work: () => Promise<void>): void {
+  work().catch((error: unknown) => {
+    sayToPerson(error instanceof Error ? error.message : String(error));
+    process.exitCode = 2;
+  });
+}

@@ -15,6 +15,7 @@ import { hashSecret } from '../../server/http/authenticate';
 import { openQueues } from '../../server/jobs/queue';
 import { createJobSender } from '../../server/jobs/sender';
 import { startWorkers } from '../../server/jobs/workers';
+import { startOutboxServer } from '../../server/mail/outbox-server';
 import type { KeyScope, Role } from '../../shared/roles';
 import { ROLES } from '../../shared/roles';
 
@@ -32,7 +33,13 @@ export async function openHouse() {
   const dataDir = mkdtempSync(path.join(os.tmpdir(), 'witness-mark-house-'));
   const migrator = new pg.Pool({ connectionString: migratorUrl, max: 2 });
   const database = openServiceDatabase(migratorUrl);
-  const config = readConfig({ NODE_ENV: 'test', DATA_DIR: dataDir, LOG_LEVEL: 'silent' });
+  const outbox = await startOutboxServer(dataDir);
+  const config = readConfig({
+    NODE_ENV: 'test',
+    DATA_DIR: dataDir,
+    LOG_LEVEL: 'silent',
+    SMTP_URL: outbox.smtpUrl,
+  });
   const logger = pino({ level: process.env['TEST_LOG'] ?? 'silent' });
   const boss = openQueues(database.$client);
   let wake: Parameters<typeof createJobSender>[1] = () => undefined;
@@ -54,11 +61,13 @@ export async function openHouse() {
     /** As the migrator: sees every shop. For arranging and checking only. */
     migrator,
     migratorUrl,
+    /** The mail server that this application sends to. */
+    outbox,
     anonymous: () => supertest(app),
     makeShop: (options?: { roles?: readonly Role[] }) => makeShop(migrator, app, options?.roles ?? ROLES),
     close: async () => {
       await boss.stop({ graceful: true, wait: true, timeout: 20_000 });
-      await Promise.all([database.$client.end(), migrator.end()]);
+      await Promise.all([database.$client.end(), migrator.end(), outbox.stop()]);
       await onMaintenance(templateUrl, `DROP DATABASE ${name} WITH (FORCE)`);
       rmSync(dataDir, { recursive: true, force: true });
     },

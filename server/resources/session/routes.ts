@@ -10,7 +10,7 @@ import { endEverySession, endOneSession, listSessions } from './sessions';
 
 /** Sign-in, sign-out, who am I, another of one's shops, and where else one is signed in. */
 export function sessionRoutes(deps: Deps): Route[] {
-  const limit = createFailedSignInLimit(deps.now);
+  const limit = createFailedSignInLimit(() => deps.now());
   return [
     route({
       method: 'post',
