@@ -16,8 +16,8 @@ export type RecordUnit = {
   knownFromDay: number | null;
   /** Register: still in use as far as the shop knows; it is then observed up to the day of the analysis. */
   isActive?: boolean;
-  /** Readings that belong to no repair: of the register, or taken at the bench. */
-  readings?: readonly { day: number; hours: number | null }[];
+  /** Readings that belong to no repair: of the register, or taken at the bench before the repair is closed. */
+  readings?: readonly { day: number; hours: number | null; isAtBench?: boolean }[];
 };
 
 export type TicketType = 'repair' | 'setup' | 'counter_sale' | 'internal';
