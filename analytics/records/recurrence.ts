@@ -23,9 +23,9 @@ export type ModelRecurrence = {
  * Repairs of machines of a model against their age, for the mean cumulative function and MTBF.
  *
  * On the calendar clock from in-service. A unit is observed from when it is known, up to a reading that belongs to
- * no repair, or to `asOfDay` where the register has it as active; repairs after such an end are left out, for they
- * were seen only because it broke. A unit without one and is used only where a model has nothing else. Repairs are those of a trouble: eligible rows of
- * `repairFacts`, on the day the machine came in.
+ * no repair, or to `asOfDay` where the register has it as active. Repairs after such an end are left out: they were
+ * seen only because it broke. A unit without such an end is used only where a model has nothing else. Repairs are
+ * those of a trouble (eligible rows of `repairFacts`), on the day the machine came in.
  */
 export function recurrence(records: {
   units: readonly RecordUnit[];
