@@ -39,5 +39,8 @@ export const effectiveComebacks: SQL = sql`(
   FROM ${effective} e
 )`;
 
-/** Days of a return; needs aliases e (effective), f (first repair) and s (the return). */
-export const daysOfReturn = sql`coalesce(e.days, coalesce(s.opened_on, s.closed_on) - f.work_on)`;
+/** The day that the machine was back; needs alias s (the return). */
+export const returnedOn = sql`coalesce(s.opened_on, s.work_on)`;
+
+/** Days of a return, 0 where it came in before the work was closed; needs aliases e (effective), f (first) and s. */
+export const daysOfReturn = sql`coalesce(e.days, greatest(0, ${returnedOn} - f.work_on))`;

@@ -24,7 +24,7 @@ export function createJobSender(boss: PgBoss, wake: (name: JobName) => void): Jo
 async function executeOn(tx: Transaction, text: string, values: readonly unknown[] = []): Promise<unknown[]> {
   const chunks = text
     .split(/\$(\d+)/)
-    .map((piece, at) => (at % 2 === 0 ? sql.raw(piece) : sql`${values[Number(piece) - 1]}`));
+    .map((piece, at) => (at % 2 === 0 ? sql.raw(piece) : sql`${values[Number(piece) - 1] ?? null}`));
   const result = await tx.execute(sql.join(chunks));
   return result.rows;
 }

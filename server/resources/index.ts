@@ -2,6 +2,7 @@ import type { Deps } from '../deps';
 import type { Route } from '../http/route';
 import { auditRoutes } from './audit-log/routes';
 import { cascadeRoutes } from './cascades/routes';
+import { comebackRoutes } from './comebacks/routes';
 import { familyRoutes } from './families/routes';
 import { keyRoutes } from './keys/routes';
 import { openApiRoutes } from './openapi/routes';
@@ -25,6 +26,7 @@ export function allRoutes(deps: Deps): Route[] {
     ...partRoutes(deps),
     ...partLifeRoutes(deps),
     ...cascadeRoutes(deps),
+    ...comebackRoutes(deps),
     ...peopleRoutes(deps),
     ...keyRoutes(deps),
     ...shopRoutes(deps),
