@@ -1,0 +1,145 @@
+import type { HazardBetween, UnitAges } from './hazards';
+import type { ModelHistory, Occasion, UnitHistory } from './histories';
+
+/** A visit of one unit that replaced A (the first of a pair), B, or both. */
+export type PairStep = { at: number; hasA: boolean; hasB: boolean };
+
+/** Steps of one unit joined while the gap is within the window. */
+export type PairEpisode = { unit: number; steps: PairStep[]; hasA: boolean; hasB: boolean };
+
+export type PairUnits = { a: number; b: number; units: number[] };
+
+/** Days on which each component failed, unit by unit: what every pair of the model is made from. */
+export const failureIndex = (model: ModelHistory): Map<number, { unit: number; at: number }[]> => {
+  const index = new Map<number, { unit: number; at: number }[]>();
+  model.units.forEach(({ occasions }, unit) => {
+    occasions.forEach(({ failed }, at) => {
+      for (const component of failed) {
+        const list = index.get(component);
+        if (list) list.push({ unit, at });
+        else index.set(component, [{ unit, at }]);
+      }
+    });
+  });
+  return index;
+};
+
+/** Pairs that failed within the window of each other at least once, and the units where they did. */
+export const linkedPairs = (model: ModelHistory, windowDays: number, components: number): PairUnits[] => {
+  const pairs = new Map<number, PairUnits>();
+  const note = (first: number, second: number, unit: number) => {
+    if (first === second) return;
+    const a = Math.min(first, second);
+    const b = Math.max(first, second);
+    const key = a * components + b;
+    const pair = pairs.get(key);
+    if (!pair) pairs.set(key, { a, b, units: [unit] });
+    else if (pair.units.at(-1) !== unit) pair.units.push(unit);
+  };
+  model.units.forEach(({ occasions }, unit) => {
+    const near: Occasion[] = [];
+    for (const occasion of occasions) {
+      if (occasion.failed.length === 0) continue;
+      while (near[0] && near[0].day < occasion.day - windowDays) near.shift();
+      near.push(occasion);
+      for (const earlier of near)
+        for (const first of earlier.failed) for (const second of occasion.failed) note(first, second, unit);
+    }
+  });
+  return [...pairs.values()].sort((x, y) => x.a - y.a || x.b - y.b);
+};
+
+export const pairSteps = ({ occasions }: UnitHistory, a: number, b: number): PairStep[] => {
+  const steps: PairStep[] = [];
+  occasions.forEach(({ failed }, at) => {
+    const hasA = failed.includes(a);
+    const hasB = failed.includes(b);
+    if (hasA || hasB) steps.push({ at, hasA, hasB });
+  });
+  return steps;
+};
+
+export const pairEpisodes = (
+  unit: UnitHistory,
+  unitAt: number,
+  steps: readonly PairStep[],
+  windowDays: number,
+): PairEpisode[] => {
+  const episodes: PairEpisode[] = [];
+  let lastDay = -Infinity;
+  for (const step of steps) {
+    const day = unit.occasions[step.at]?.day ?? 0;
+    let episode = episodes.at(-1);
+    if (!episode || day - lastDay > windowDays) {
+      episode = { unit: unitAt, steps: [], hasA: false, hasB: false };
+      episodes.push(episode);
+    }
+    episode.steps.push(step);
+    episode.hasA ||= step.hasA;
+    episode.hasB ||= step.hasB;
+    lastDay = day;
+  }
+  return episodes;
+};
+
+const lastRenewalAge = (ages: UnitAges, component: number, day: number): number => {
+  let age = 0;
+  for (const renewal of ages.renewals) {
+    if (renewal.component > component) break;
+    if (renewal.component === component && renewal.day <= day) age = renewal.age;
+  }
+  return age;
+};
+
+/** Whether the other part already failed within the window: then this failure begins no episode. */
+const failedBefore = ({ occasions }: UnitHistory, component: number, at: number, windowDays: number) => {
+  const since = (occasions[at]?.day ?? 0) - windowDays;
+  for (let before = at - 1; before >= 0; before -= 1) {
+    const occasion = occasions[before];
+    if (!occasion || occasion.day < since) return false;
+    if (occasion.failed.includes(component)) return true;
+  }
+  return false;
+};
+
+const nextFailureDay = ({ occasions }: UnitHistory, component: number, at: number, stopDay: number) => {
+  for (let after = at + 1; after < occasions.length; after += 1) {
+    const occasion = occasions[after];
+    if (!occasion || occasion.day > stopDay) break;
+    if (occasion.failed.includes(component)) return occasion.day;
+  }
+  return Infinity;
+};
+
+/**
+ * Expected number of times that `second` fails by itself within the window after a failure of `first`, from its
+ * own age-dependent hazard over exactly the days in which such a failure would have been counted: to the end of
+ * the window, the next failure of either, or the end of observation (the compensator of the counting process).
+ */
+export const expectedAfter = (
+  model: ModelHistory,
+  ages: readonly UnitAges[],
+  between: HazardBetween,
+  index: Map<number, { unit: number; at: number }[]>,
+  first: number,
+  second: number,
+  windowDays: number,
+): number => {
+  let expected = 0;
+  const list = index.get(first) ?? [];
+  list.forEach(({ unit: unitAt, at }, position) => {
+    const unit = model.units[unitAt];
+    const own = ages[unitAt];
+    const occasion = unit?.occasions[at];
+    if (!unit || !own || !occasion || occasion.failed.includes(second)) return;
+    if (failedBefore(unit, second, at, windowDays)) return;
+    const next = list[position + 1];
+    const nextDay = next?.unit === unitAt ? (unit.occasions[next.at]?.day ?? Infinity) : Infinity;
+    const stopDay = Math.min(occasion.day + windowDays, nextDay, unit.toDay);
+    const toDay = Math.min(stopDay, nextFailureDay(unit, second, at, stopDay));
+    if (toDay <= occasion.day) return;
+    const start = lastRenewalAge(own, second, occasion.day);
+    expected += between(second, own.clock(occasion.day) - start, own.clock(toDay) - start);
+  });
+  return expected;
+};
