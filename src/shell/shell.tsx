@@ -28,7 +28,7 @@ export function Shell() {
       >
         Skip to the page
       </a>
-      <div
+      <header
         data-screen-only
         className="sticky top-0 hidden h-screen flex-col gap-4 overflow-y-auto border-r border-rule pt-5 pb-4 desk:flex"
       >
@@ -43,7 +43,7 @@ export function Shell() {
         <div className="mt-auto px-5 pt-3">
           <Who />
         </div>
-      </div>
+      </header>
       <header
         data-screen-only
         className="sticky top-0 z-30 flex h-14 items-center justify-between border-b border-rule bg-paper pr-1.5 pl-4 desk:hidden"

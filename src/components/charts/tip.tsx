@@ -7,10 +7,14 @@ type Props = { active?: boolean; payload?: readonly { payload?: unknown }[] };
 export function TipContent({ active, payload }: Props) {
   const datum = payload?.[0]?.payload;
   if (!active || !hasTip(datum)) return null;
+  return <TipCard tip={datum.tip} />;
+}
+
+export function TipCard({ tip }: { tip: Tip }) {
   return (
     <div className="max-w-[20rem] rounded-bench border border-edge bg-sheet px-3 py-2 text-sm text-ink shadow-bench">
-      <p className="font-heading">{datum.tip.heading}</p>
-      {datum.tip.lines.map((line) => (
+      <p className="font-heading">{tip.heading}</p>
+      {tip.lines.map((line) => (
         <p key={line}>{line}</p>
       ))}
     </div>

@@ -103,6 +103,7 @@ export function DataTable<Row extends object>(props: Props<Row>) {
                     className={classNames(
                       'border-b border-rule py-1.5 pr-3 font-label whitespace-nowrap text-dim last:pr-0',
                       column?.align === 'right' ? 'text-right' : 'text-left',
+                      column?.className,
                     )}
                   >
                     {header.column.getCanSort() ? (

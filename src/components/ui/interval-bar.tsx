@@ -20,7 +20,7 @@ export function IntervalBar({ estimate, lower, upper, max, center, text, label, 
   const x = (value: number) => 5 + (Math.min(Math.max(value, 0), max) / (max || 1)) * (WIDTH - 10);
   const color = `var(--color-${tone})`;
   return (
-    <span className="inline-flex items-center gap-2">
+    <span className="inline-flex items-center gap-2 align-middle">
       <svg role="img" aria-label={label} width={WIDTH} height="20" className="shrink-0">
         {center !== undefined && center !== null && (
           <line

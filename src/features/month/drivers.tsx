@@ -47,8 +47,8 @@ function driverColumns(review: MonthReview, formats: Formats): Column<Driver>[] 
       value: (row) => `${row.component.name}${row.model ? `, ${row.model.name}` : ''}`,
       cell: (row) => (
         <>
-          <Link to={paths.part(row.component.id, { model: row.model?.id })}>{row.component.name}</Link>{' '}
-          <span className="text-dim">{row.model?.name ?? 'all models'}</span>
+          <Link to={paths.part(row.component.id, { model: row.model?.id })}>{row.component.name}</Link>
+          <span className="block text-sm text-dim">{row.model?.name ?? 'all models'}</span>
         </>
       ),
       isRowHeader: true,

@@ -61,12 +61,15 @@ export function Component() {
     >
       {review.rows.length > 0 && (
         <>
-          <div className="grid items-start gap-6 desk:grid-cols-[minmax(0,1fr)_292px]">
-            <div className="order-2 desk:order-1">
+          {/* On a phone what needs doing comes before the picture; at the desk it stands beside it. */}
+          <div className="grid items-start gap-6 desk:grid-cols-[minmax(0,1fr)_292px] desk:grid-rows-[auto_1fr]">
+            <div className="min-w-0 desk:col-start-2 desk:row-start-1">
+              <NeedsDoing todos={review.todos} />
+            </div>
+            <div className="min-w-0 desk:col-start-1 desk:row-span-2 desk:row-start-1">
               <MonthPicture review={review} formats={formats} />
             </div>
-            <div className="order-1 flex flex-col gap-6 desk:order-2">
-              <NeedsDoing todos={review.todos} />
+            <div className="min-w-0 desk:col-start-2 desk:row-start-2">
               <MonthFigures review={review} formats={formats} />
             </div>
           </div>
