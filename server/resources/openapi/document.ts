@@ -6,17 +6,6 @@ import { SESSION_COOKIE } from '../../http/session-token';
 
 export type OpenApiDocument = ReturnType<typeof describeRoutes>;
 
-const problem = z.strictObject({
-  type: z.string(),
-  title: z.string(),
-  status: z.number().int(),
-  detail: z.string(),
-  instance: z.string().optional(),
-  errors: z
-    .array(z.strictObject({ path: z.string().describe('JSON Pointer'), message: z.string() }))
-    .optional(),
-});
-
 const FILE_TYPES: Record<string, string> = {
   csv: 'text/csv',
   pdf: 'application/pdf',
@@ -32,8 +21,8 @@ export function describeRoutes(routes: readonly Route[]) {
     name: SESSION_COOKIE,
   });
   registry.registerComponent('securitySchemes', 'key', { type: 'http', scheme: 'bearer' });
-  const problemSchema = registry.register('Problem', problem);
-  for (const entry of routes) registry.registerPath(describe(entry, problemSchema));
+  registerProblem(registry);
+  for (const entry of routes) registry.registerPath(describe(entry));
   return new OpenApiGeneratorV31(registry.definitions).generateDocument({
     openapi: '3.1.0',
     info: {
@@ -46,7 +35,30 @@ export function describeRoutes(routes: readonly Route[]) {
   });
 }
 
-function describe(entry: Route, problemSchema: z.ZodType): RouteConfig {
+/** RFC 9457, as `http/problem.ts` sends it. */
+function registerProblem(registry: OpenAPIRegistry): void {
+  registry.registerComponent('schemas', 'Problem', {
+    type: 'object',
+    required: ['type', 'title', 'status', 'detail'],
+    properties: {
+      type: { type: 'string' },
+      title: { type: 'string' },
+      status: { type: 'integer' },
+      detail: { type: 'string' },
+      instance: { type: 'string' },
+      errors: {
+        type: 'array',
+        items: {
+          type: 'object',
+          required: ['path', 'message'],
+          properties: { path: { type: 'string', format: 'json-pointer' }, message: { type: 'string' } },
+        },
+      },
+    },
+  });
+}
+
+function describe(entry: Route): RouteConfig {
   const body = entry.body && {
     content: { [entry.before?.length ? 'multipart/form-data' : 'application/json']: { schema: entry.body } },
   };
@@ -67,7 +79,7 @@ function describe(entry: Route, problemSchema: z.ZodType): RouteConfig {
       [entry.status ?? (entry.answer || fileTypeOf(entry) ? 200 : 204)]: answerOf(entry),
       default: {
         description: 'A problem',
-        content: { 'application/problem+json': { schema: problemSchema } },
+        content: { 'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } } },
       },
     },
   };

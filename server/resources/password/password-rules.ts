@@ -42,15 +42,17 @@ function reasonToRefuse(password: string, names: readonly string[]): string | un
   return undefined;
 }
 
-/** What is left when every frequent word and everything that is no letter is taken away: nothing. */
+/** Nothing is left when every frequent word is taken away, digits and signs put around or in place of letters or not. */
 function isMadeOfFrequentWords(password: string): boolean {
   const lower = password.toLowerCase();
-  const withoutLookalikes = [...lower].map((character) => LOOKALIKES[character] ?? character).join('');
-  return [lower, withoutLookalikes].some((spelling) => {
-    const letters = spelling.replace(/[^\p{L}]/gu, '');
-    return leftOver(letters) === '';
-  });
+  const core = lower.replace(/^[^\p{L}]+|[^\p{L}]+$/gu, '');
+  return [lower, withoutLookalikes(lower), withoutLookalikes(core)].some(
+    (spelling) => leftOver(spelling.replace(/[^\p{L}]/gu, '')) === '',
+  );
 }
+
+const withoutLookalikes = (text: string) =>
+  [...text].map((character) => LOOKALIKES[character] ?? character).join('');
 
 function leftOver(letters: string): string {
   return WORDS.reduce((rest, word) => rest.replaceAll(word, ' '), letters).replaceAll(' ', '');
