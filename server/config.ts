@@ -8,7 +8,8 @@ const settings = z.object({
   PORT: z.coerce.number().int().min(0).max(65_535).default(4600),
   HOST: z.string().min(1).default('127.0.0.1'),
   PUBLIC_URL: z.url({ protocol: /^https?$/ }).optional(),
-  TRUST_PROXY: z.string().optional(),
+  // How many proxies stand in front, or their addresses.
+  TRUST_PROXY: z.union([z.coerce.number().int().positive(), z.string()]).optional(),
   DATA_DIR: z.string().min(1).default('.data'),
   DATABASE_URL: z.string().startsWith('postgres').optional(),
   DEMO: flag.default(true),
@@ -25,7 +26,7 @@ export type Config = {
   host: string;
   publicUrl: string;
   isHttps: boolean;
-  trustProxy: string | undefined;
+  trustProxy: string | number | undefined;
   dataDir: string;
   /** The migrator's; absent where the local cluster is used. */
   databaseUrl: string | undefined;

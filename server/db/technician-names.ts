@@ -1,13 +1,13 @@
 import { foldText } from './fold';
 
-// "DK/RM", "D. Kern & R. Mott", "Kern, Mott", "Kern and Mott", "Kern + Mott", one a line
-const BETWEEN_NAMES = /\s*(?:[/&,;+|\n]|\s(?:and|with)\s)\s*/i;
+const BETWEEN_NAMES = /\s*[/;&+]\s*|\s+and\s+/i;
 
-/** The names in a record's technician field, each once, as they are spelled there. */
+/** The names in a technician field, each once: `A / B`, `A; B`, `A & B`, `A + B`, `A and B`. A comma may be part of one name. */
 export function namesIn(text: string | null): string[] {
   const names = (text ?? '')
     .split(BETWEEN_NAMES)
     .map((name) => name.trim().replace(/\s+/g, ' '))
     .filter((name) => name !== '');
-  return [...new Map(names.map((name) => [foldText(name), name])).values()];
+  // The first spelling is the one that is kept.
+  return [...new Map(names.toReversed().map((name) => [foldText(name), name])).values()].toReversed();
 }

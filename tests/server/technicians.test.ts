@@ -62,7 +62,8 @@ describe('names in a record', () => {
     ['DK', ['DK']],
     [' DK / rm ', ['DK', 'rm']],
     ['D. Kern & R.  Mott', ['D. Kern', 'R. Mott']],
-    ['Dana Kern and Dana kern', ['Dana kern']],
+    ['Dana Kern and Dana kern', ['Dana Kern']],
+    ['Kern, Dana; Mott, Ray', ['Kern, Dana', 'Mott, Ray']],
     ['', []],
     [null, []],
   ])('are found in %j', (text, names) => {
