@@ -126,7 +126,7 @@ export function DataTable<Row extends object>(props: Props<Row>) {
           </thead>
           <tbody>
             {sorted.map((row) => (
-              <tr key={rowId(row)} className="hover:bg-wash/60">
+              <tr key={rowId(row)} className="hover:bg-wash/60 last:*:border-b-0">
                 {shown.map((column) => (
                   <Cell key={column.id} column={column} row={row} />
                 ))}

@@ -11,7 +11,7 @@ type Props<Value extends string> = {
 export function Segmented<Value extends string>({ label, value, onChange, options }: Props<Value>) {
   const name = useId();
   return (
-    <fieldset className="inline-flex flex-wrap rounded-bench border border-edge bg-sheet">
+    <fieldset className="inline-flex w-fit flex-wrap self-start rounded-bench border border-edge bg-sheet">
       <legend className="sr-only">{label}</legend>
       {options.map((option) => (
         <label
