@@ -34,14 +34,14 @@ export function createMailer({ smtpUrl, mailFrom }: Pick<Config, 'smtpUrl' | 'ma
   };
 }
 
-// A code of the server is its refusal; a failure before the message itself was sent leaves nothing in doubt either.
-const BEFORE_THE_MESSAGE = ['EDNS', 'ECONNECTION', 'ETLS', 'EAUTH', 'ENOAUTH', 'EENVELOPE'];
+const BEFORE_THE_MESSAGE = ['EDNS', 'ETLS', 'EAUTH', 'ENOAUTH', 'EENVELOPE'];
 
+/** What is certain not to have gone out: refused by the server's own code, or no connection was ever made. */
 function wasRefused(error: unknown): boolean {
   if (!(error instanceof Error)) return false;
-  if ('responseCode' in error && typeof error.responseCode === 'number') return true;
-  const command = 'command' in error ? error.command : undefined;
-  if (command === 'CONN') return true;
+  if ('responseCode' in error && typeof error.responseCode === 'number' && error.responseCode >= 400)
+    return true;
+  if ('syscall' in error && error.syscall === 'connect') return true;
   return 'code' in error && typeof error.code === 'string' && BEFORE_THE_MESSAGE.includes(error.code);
 }
 
