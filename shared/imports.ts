@@ -107,6 +107,15 @@ export const filePreview = z.strictObject({
 });
 export type FilePreview = z.infer<typeof filePreview>;
 
+/** The fields of the form beside its file, in any order; the mapping is JSON. */
+export const previewForm = z.strictObject({ kind: z.string().max(40).default('repairs') });
+export const createImportForm = z.strictObject({
+  kind: z.string().max(40),
+  spoolId: z.uuid().optional(),
+  mapping: z.string().max(200_000).optional(),
+  dryRun: z.enum(['true', 'false']).default('false'),
+});
+
 const text = (max: number) => z.string().max(max);
 const amount = z.number().int().min(-2_000_000_000).max(2_000_000_000);
 

@@ -1,5 +1,6 @@
 import type PgBoss from 'pg-boss';
 import type { Deps } from '../deps';
+import { runImport } from '../imports/run-import';
 import { deliverMail } from '../mail/deliver';
 import { handleAnalysis } from './analysis/handle';
 import type { JobName, JobPayloads } from './queue';
@@ -12,7 +13,7 @@ export type WorkerDeps = Deps & {
 
 type Handlers = { [Name in JobName]: (deps: WorkerDeps, payload: JobPayloads[Name]) => Promise<void> };
 
-const handlers: Partial<Handlers> = { analysis: handleAnalysis, mail: deliverMail };
+const handlers: Partial<Handlers> = { import: runImport, analysis: handleAnalysis, mail: deliverMail };
 
 /** Starts working off the queues; the answer wakes the worker of a queue at once. */
 export async function startWorkers(deps: WorkerDeps): Promise<(name: JobName) => void> {

@@ -3,8 +3,11 @@ import type { Route } from '../http/route';
 import { auditRoutes } from './audit-log/routes';
 import { cascadeRoutes } from './cascades/routes';
 import { comebackRoutes } from './comebacks/routes';
+import { componentRoutes } from './components/routes';
 import { familyRoutes } from './families/routes';
+import { importRoutes } from './imports/routes';
 import { keyRoutes } from './keys/routes';
+import { modelRoutes } from './models/routes';
 import { openApiRoutes } from './openapi/routes';
 import { outboxRoutes } from './outbox/routes';
 import { partLifeRoutes } from './part-life/routes';
@@ -12,6 +15,8 @@ import { partRoutes } from './parts/routes';
 import { passwordRoutes } from './password/routes';
 import { peopleRoutes } from './people/routes';
 import { repairRoutes } from './repairs/routes';
+import { repairsBatchRoutes } from './repairs-batch/routes';
+import { reportRoutes } from './reports/routes';
 import { sessionRoutes } from './session/routes';
 import { shopRoutes } from './shop/routes';
 import { technicianRoutes } from './technicians/routes';
@@ -21,12 +26,17 @@ import { unitRoutes } from './units/routes';
 export function allRoutes(deps: Deps): Route[] {
   const routes = [
     ...sessionRoutes(deps),
+    ...importRoutes(deps),
+    ...repairsBatchRoutes(deps),
     ...repairRoutes(deps),
     ...unitRoutes(deps),
+    ...modelRoutes(deps),
+    ...componentRoutes(deps),
     ...partRoutes(deps),
     ...partLifeRoutes(deps),
     ...cascadeRoutes(deps),
     ...comebackRoutes(deps),
+    ...reportRoutes(deps),
     ...peopleRoutes(deps),
     ...keyRoutes(deps),
     ...shopRoutes(deps),
