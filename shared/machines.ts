@@ -120,6 +120,8 @@ export const recurrence = z.strictObject({
   meanDaysBetweenInterval: interval,
 });
 
+export type Recurrence = z.infer<typeof recurrence>;
+
 export const modelWhole = modelListed.extend({
   components: z.array(modelComponent),
   recurrence,

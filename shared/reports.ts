@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { cents, day, id, interval, listOf, named } from './basics';
+import { recurrence } from './machines';
 
 export const month = z.string().regex(/^\d{4}-(0[1-9]|1[0-2])$/, 'Write a month as 2026-04.');
 
@@ -83,3 +84,14 @@ export const meanQuery = z.strictObject({
   maker: z.string().max(200).optional(),
   model: z.string().max(200).optional(),
 });
+
+/** How the machines of each model come in again: the mean number of repairs by age. */
+export const meanCumulativeList = listOf(recurrence.extend({ model: named }));
+/** Mean days between repairs, where it can be said; else `reason` says why not. */
+export const meanTimeList = listOf(
+  recurrence.omit({ rows: true, kind: true, reason: true }).extend({
+    model: named,
+    reason: z.enum(['came_in', 'trend', 'no_machines']).nullable(),
+  }),
+);
+export type MeanTimeRow = z.infer<typeof meanTimeList>['data'][number];

@@ -2,6 +2,9 @@ import { groupRows } from './record-types';
 import type { RecordUnit } from './record-types';
 import type { RepairFacts } from './repair-facts';
 
+/** What is needed of a repair. */
+type VisitFacts = Pick<RepairFacts, 'unitId' | 'openingDay' | 'isEligible'>;
+
 /** A unit's repairs against its age in days, observed from `entry` (exclusive) to `end`. */
 export type RepairHistory = { unitId: string; entry: number; end: number; events: number[] };
 
@@ -29,7 +32,7 @@ export type ModelRecurrence = {
  */
 export function recurrence(records: {
   units: readonly RecordUnit[];
-  facts: readonly RepairFacts[];
+  facts: readonly VisitFacts[];
   asOfDay: number;
 }): ModelRecurrence[] {
   const { units, facts, asOfDay } = records;
@@ -69,7 +72,7 @@ function observedUntil(unit: RecordUnit, asOfDay: number): number | null {
 
 function historyOf(
   unit: RecordUnit,
-  visits: readonly RepairFacts[],
+  visits: readonly VisitFacts[],
   endDay: number | null,
 ): RepairHistory | null {
   const { inServiceDay } = unit;

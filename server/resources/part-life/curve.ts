@@ -1,5 +1,6 @@
 import { kaplanMeier, type LifeObservation } from '../../../analytics';
 import type { PartLife } from '../../../shared/parts';
+import { thinned } from '../../lives/thinned';
 
 const MOST_ROWS = 400;
 const TICKS = 6;
@@ -7,15 +8,6 @@ const TICKS = 6;
 /** The life curve; a long one is thinned for the wire, every row that is sent being exact. */
 export function curveOf(observations: readonly LifeObservation[]): PartLife['kaplanMeier'] {
   return thinned(kaplanMeier(observations), MOST_ROWS);
-}
-
-/** Evenly spaced rows, the first and the last among them. */
-export function thinned<Row>(rows: readonly Row[], most: number): Row[] {
-  if (rows.length <= most) return [...rows];
-  const step = (rows.length - 1) / (most - 1);
-  return Array.from({ length: most }, (_, at) => rows[Math.round(at * step)]).filter(
-    (row) => row !== undefined,
-  );
 }
 
 /** How many were under observation at a few round ages. */

@@ -62,5 +62,6 @@ export function newestAgainstOlder(
   const comparison = hazardRatio(ofPart(pair.older.id), ofPart(pair.newer.id));
   if (comparison.kind === 'notEstimable') return null;
   const { ratio, interval, pValue } = comparison;
+  if (ratio === null) return null;
   return { ...pair, ratio, interval, pValue, method: 'Weibull lives with one common shape' };
 }
