@@ -29,7 +29,10 @@ export function agesOn(clock: AgeClock, formats: Formats) {
     /** "298", for an axis. */
     tick: (age: number): string => {
       const shown = inUnit(age);
-      return formats.number(shown, shown > 0 && shown < 10 && !Number.isInteger(Math.round(shown * 100) / 100) ? 1 : 0);
+      return formats.number(
+        shown,
+        shown > 0 && shown < 10 && !Number.isInteger(Math.round(shown * 100) / 100) ? 1 : 0,
+      );
     },
   };
 }

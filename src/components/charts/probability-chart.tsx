@@ -1,4 +1,14 @@
-import { CartesianGrid, ComposedChart, Line, Tooltip, usePlotArea, useXAxisScale, useYAxisScale, XAxis, YAxis } from 'recharts';
+import {
+  CartesianGrid,
+  ComposedChart,
+  Line,
+  Tooltip,
+  usePlotArea,
+  useXAxisScale,
+  useYAxisScale,
+  XAxis,
+  YAxis,
+} from 'recharts';
 import { GRID, MARGIN, X_AXIS, Y_AXIS } from './axes';
 import { ChartBox } from './chart-box';
 import { TipContent, type Tip } from './tip';

@@ -40,7 +40,11 @@ export function StepMarks({ curves, start, line, marks, end, underLabel }: Props
         const lastY = y(last?.value ?? start);
         return (
           <g key={curve.name}>
-            <path d={stairBand(curve.points, curve.end, x, y)} fill={color} opacity={curves.length > 1 ? 0.12 : 0.2} />
+            <path
+              d={stairBand(curve.points, curve.end, x, y)}
+              fill={color}
+              opacity={curves.length > 1 ? 0.12 : 0.2}
+            />
             <path
               d={stairs({ at: 0, value: start }, curve.points, curve.end, x, y)}
               fill="none"
@@ -65,7 +69,15 @@ export function StepMarks({ curves, start, line, marks, end, underLabel }: Props
         />
       )}
       {marks.map((mark) => (
-        <Named key={mark.text} mark={mark} x={x} y={y} left={area.x} right={area.x + area.width} bottom={bottom} />
+        <Named
+          key={mark.text}
+          mark={mark}
+          x={x}
+          y={y}
+          left={area.x}
+          right={area.x + area.width}
+          bottom={bottom}
+        />
       ))}
       {active && (
         <circle
@@ -102,7 +114,11 @@ function Named({ mark, x, y, left, right, bottom }: NamedProps) {
         <path d={`M${x(mark.lower)} ${level}H${x(mark.upper)}`} strokeWidth="3.5" opacity="0.45" />
       )}
       <circle cx={at} cy={level} r="4" fill="var(--color-brass)" stroke="none" />
-      <Label x={isLate ? at - 7 : at + 8} y={isLate ? level + 17 : level - 8} anchor={isLate ? 'end' : 'start'}>
+      <Label
+        x={isLate ? at - 7 : at + 8}
+        y={isLate ? level + 17 : level - 8}
+        anchor={isLate ? 'end' : 'start'}
+      >
         {mark.text}
       </Label>
     </g>
