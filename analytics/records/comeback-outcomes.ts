@@ -36,16 +36,21 @@ export function repairOutcomes(
     const day = Math.min(returnDay, held?.day ?? returnDay);
     returns.set(firstRepairId, { day, isOurs: isOurs || (held?.isOurs ?? false) });
   }
-  return repairs
-    .filter(({ workDay }) => workDay <= asOfDay)
-    .map((repair) => {
-      const back = returns.get(repair.id);
-      return {
-        ...repair,
-        ageDays: daysOf(repair.workDay, asOfDay),
-        isReturned: back !== undefined,
-        isOurs: back?.isOurs ?? false,
-        returnedAfterDays: back ? Math.max(0, daysOf(repair.workDay, back.day)) : null,
-      };
+  const outcomes: RepairOutcome[] = [];
+  for (const { id, workDay, modelId, technicianIds, componentIds } of repairs) {
+    if (workDay > asOfDay) continue;
+    const back = returns.get(id);
+    outcomes.push({
+      id,
+      workDay,
+      modelId,
+      technicianIds,
+      componentIds,
+      ageDays: daysOf(workDay, asOfDay),
+      isReturned: back !== undefined,
+      isOurs: back?.isOurs ?? false,
+      returnedAfterDays: back ? Math.max(0, daysOf(workDay, back.day)) : null,
     });
+  }
+  return outcomes;
 }

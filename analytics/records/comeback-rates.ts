@@ -5,7 +5,7 @@ import type { Interval } from '../types';
 import { repairOutcomes } from './comeback-outcomes';
 import type { RateComeback, RateRepair, RepairOutcome } from './comeback-outcomes';
 import { monthAfter, monthBefore, monthBounds, monthOf } from './day-number';
-import { projectReturns } from './project-returns';
+import { projectReturns, returnCurve } from './project-returns';
 import { groupRows } from './record-types';
 import { shrinkRates } from './shrink-rates';
 import { windowClock } from './window-clock';
@@ -70,12 +70,13 @@ export function comebackRates(
   const daysOf = windowClock(input.pausedMonths);
   const outcomes = repairOutcomes(input.repairs, input.comebacks, asOfDay, daysOf);
   if (by === 'month') return monthRows(outcomes, asOfDay, windowDays, daysOf);
+  const curve = returnCurve(outcomes, windowDays);
   const rows = [...groupByKeys(outcomes, by)].map(([key, group]) => {
     const maturing = group.some(({ ageDays }) => ageDays < windowDays);
     return {
       ...rowOf(key, group),
       maturing,
-      projected: maturing ? projectReturns(group, outcomes, windowDays) : null,
+      projected: maturing ? projectReturns(group, curve, windowDays) : null,
     };
   });
   return shrinkRates(rows);
@@ -111,7 +112,8 @@ function monthRows(
     const group = groups.get(month) ?? [];
     const maturing = isMaturing(month, asOfDay, windowDays, daysOf);
     const row = { ...rowOf(month, group), month, maturing, ...limitsOf(group.length, base) };
-    if (maturing) row.projected = projectReturns(group, ordered.slice(0, seen), windowDays);
+    if (maturing)
+      row.projected = projectReturns(group, returnCurve(ordered.slice(0, seen), windowDays), windowDays);
     else row.signal = signalOf(row);
     rows.push(row);
     seen += group.length;

@@ -31,17 +31,21 @@ export function spansOf(start: LifeStart, end: LifeEnd, readings: readonly Trust
   const hours = hoursOf(start, end, readings);
   const days = daysOf(start, end);
   const isEvent = end.outcome !== 'censored' && start.origin !== 'assumed_original';
-  const isZero = (span: LifeSpan | null) => isEvent && span !== null && !span.isCut && span.exit === 0;
-  const isDeadOnArrival = isZero(hours.span) || (hours.span === null && isZero(days.span));
-  if (hours.span && isZero(hours.span)) hours.span.exit = HALF_TENTH_HOUR;
-  if (days.span && isZero(days.span)) days.span.exit = HALF_DAY;
+  const isZeroHours = isEvent && isZero(hours.span);
+  const isZeroDays = isEvent && isZero(days.span);
+  if (hours.span && isZeroHours) hours.span.exit = HALF_TENTH_HOUR;
+  if (days.span && isZeroDays) days.span.exit = HALF_DAY;
   return {
     hours: hours.span,
     hoursMissing: hours.missing,
     days: days.span,
     daysMissing: days.missing,
-    isDeadOnArrival,
+    isDeadOnArrival: isZeroHours || (hours.span === null && isZeroDays),
   };
+}
+
+function isZero(span: LifeSpan | null): boolean {
+  return span !== null && !span.isCut && span.exit === 0;
 }
 
 type SpanOrReason = { span: LifeSpan | null; missing: MissingSpan | null };
@@ -50,12 +54,13 @@ function hoursOf(start: LifeStart, end: LifeEnd, readings: readonly TrustedReadi
   const { reading: zero, entryReading } = start;
   if (!zero || !entryReading) return { span: null, missing: 'no_reading_at_start' };
   if (entryReading.track !== zero.track) return { span: null, missing: 'meter_restarted' };
-  const onTrack = (reading: TrustedReading | null | undefined) => reading?.track === zero.track;
   const upToEnd = lastUpTo(readings, end.day);
-  const isWhole = end.reading ? onTrack(end.reading) : end.outcome === 'censored' && onTrack(upToEnd);
-  const isRestarted = !isWhole && (end.reading ?? upToEnd)?.track !== zero.track && upToEnd !== undefined;
+  // A failure needs the reading of its own visit; a life that only stopped being seen is known up to any earlier one.
+  const atEnd = end.reading ?? (end.outcome === 'censored' ? upToEnd : undefined);
+  const isWhole = atEnd?.track === zero.track;
+  const isRestarted = !isWhole && upToEnd !== undefined && (end.reading ?? upToEnd).track !== zero.track;
   if (!isWhole && !isRestarted) return { span: null, missing: 'no_reading_at_end' };
-  const last = isWhole ? (end.reading ?? upToEnd) : lastUpTo(readings, end.day, zero.track);
+  const last = isWhole ? atEnd : lastUpTo(readings, end.day, zero.track);
   if (!last) return { span: null, missing: isRestarted ? 'meter_restarted' : 'no_reading_at_end' };
   const entry = Math.max(0, entryReading.hours - zero.hours);
   const exit = Math.max(0, last.hours - zero.hours);

@@ -109,7 +109,14 @@ describe('what drives it', () => {
   });
 
   test('each comeback once: the rows add up', () => {
-    expect(drivers.flatMap(({ comebackIds }) => comebackIds).sort()).toEqual(['r1', 'r2', 'r3', 'r4', 'r5', 'r8']);
+    expect(drivers.flatMap(({ comebackIds }) => comebackIds).sort()).toEqual([
+      'r1',
+      'r2',
+      'r3',
+      'r4',
+      'r5',
+      'r8',
+    ]);
     expect(drivers.reduce((sum, { count }) => sum + count, 0)).toBe(5);
   });
 
