@@ -73,9 +73,11 @@ export function fitWeibullTable(
   const data = weibullData(table);
   const maximum = maximizeWeibull(data);
   const covariance = maximum === null ? null : weibullCovariance(data, maximum);
-  if (maximum === null || covariance === null) return { kind: 'notEstimable', reason: 'boundary' };
+  const scale = Math.exp((maximum?.relativeLogScale ?? NaN) + data.reference);
+  if (maximum === null || covariance === null || !(scale > 0 && scale < Infinity)) {
+    return { kind: 'notEstimable', reason: 'boundary' };
+  }
   const { shape, logLikelihood } = maximum;
-  const scale = Math.exp(maximum.relativeLogScale + data.reference);
   const scaleError = Math.sqrt(covariance[0][0]);
   const shapeError = Math.sqrt(covariance[1][1]);
   const isProfile = limits === 'profile';
@@ -90,10 +92,10 @@ export function fitWeibullTable(
     covariance,
     shapeInterval: isProfile
       ? profileShapeInterval(data, maximum, confidence, shapeError)
-      : logInterval(shape, shapeError, confidence),
+      : logInterval(Math.log(shape), shapeError, confidence),
     scaleInterval: isProfile
       ? profileAgeInterval(data, maximum, 0, confidence, scaleError)
-      : logInterval(scale, scaleError, confidence),
+      : logInterval(Math.log(scale), scaleError, confidence),
     confidence,
     limits,
     warnings: table.failures < FEW_FAILURES ? ['fewFailures'] : [],
@@ -101,9 +103,14 @@ export function fitWeibullTable(
   };
 }
 
-/** Wald limits on the log scale: estimate · exp(±z·error). */
-export function logInterval(estimate: number, logError: number, confidence: number): Interval {
-  const reach = Math.exp(normalLimit(confidence) * logError);
-  const upper = estimate * reach;
-  return { lower: estimate / reach, upper: upper < Infinity ? upper : null };
+/** Wald limits on the log scale: exp(log estimate ± z·error). */
+export function logInterval(logEstimate: number, logError: number, confidence: number): Interval {
+  const reach = normalLimit(confidence) * logError;
+  return { lower: finiteExp(logEstimate - reach), upper: finiteExp(logEstimate + reach) };
+}
+
+/** e^x, null where that is beyond any number. */
+export function finiteExp(x: number): number | null {
+  const value = Math.exp(x);
+  return value < Infinity ? value : null;
 }

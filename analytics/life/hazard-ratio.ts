@@ -50,12 +50,14 @@ export function hazardRatio(
   if (common === null) return { kind: 'notEstimable', reason: 'boundary' };
   const { logRates, rateCovariance: covariance, shape } = common;
   const logRatio = (logRates[1] ?? 0) - (logRates[0] ?? 0);
+  const ratio = Math.exp(logRatio);
+  if (!(ratio > 0 && ratio < Infinity)) return { kind: 'notEstimable', reason: 'boundary' };
   const variance = (covariance[0]?.[0] ?? 0) + (covariance[1]?.[1] ?? 0) - 2 * (covariance[0]?.[1] ?? 0);
   const error = Math.sqrt(variance);
   return {
     kind: 'estimate',
-    ratio: Math.exp(logRatio),
-    interval: logInterval(Math.exp(logRatio), error, confidence),
+    ratio,
+    interval: logInterval(logRatio, error, confidence),
     pValue: normalTwoSided(logRatio / error),
     shape,
     warnings: warningsOf(tables),
