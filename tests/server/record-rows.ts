@@ -33,6 +33,8 @@ type Repair = {
   technicianText?: string | null;
   technicianIds?: readonly string[];
   lines?: readonly Line[];
+  /** What the analysis makes of it: it can come back, with trouble of these components; else why not. */
+  facts?: { leftOut?: string; trouble?: readonly string[] };
 };
 
 /** Rows of a shop's records, put straight into the tables; each call makes new ones and answers the id. */
@@ -137,6 +139,15 @@ export function recordRows(migrator: pg.Pool, shopId: string) {
     for (const technicianId of of.technicianIds ?? []) {
       await insert('repair_technicians', { shop_id: shopId, repair_id: id, technician_id: technicianId });
     }
+    if (of.facts) {
+      await insert('repair_facts', {
+        shop_id: shopId,
+        repair_id: id,
+        left_out: of.facts.leftOut ?? null,
+        trouble_component_ids: of.facts.trouble ?? [],
+        systems: [],
+      });
+    }
     return { id, number };
   }
 
@@ -153,7 +164,28 @@ export function recordRows(migrator: pg.Pool, shopId: string) {
       ...extra,
     });
 
-  return { insert, insertWithId, model, unit, component, part, customer, technician, repair, comeback };
+  /** A finished analysis, of which everything derived is as of. */
+  const analyzed = (asOf: string, summary: unknown = {}) =>
+    insertWithId('analysis_runs', {
+      state: 'ready',
+      as_of: asOf,
+      finished_at: new Date(),
+      summary: JSON.stringify(summary),
+    });
+
+  return {
+    analyzed,
+    insert,
+    insertWithId,
+    model,
+    unit,
+    component,
+    part,
+    customer,
+    technician,
+    repair,
+    comeback,
+  };
 }
 
 export type RecordRows = ReturnType<typeof recordRows>;
