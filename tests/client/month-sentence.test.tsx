@@ -113,6 +113,12 @@ describe('the month in one sentence', () => {
     expect(sentence(review)).toContain('None of the 120 repairs says which machine it was');
   });
 
+  it('asks for another month where nothing was done in the one in question', () => {
+    expect(sentence(monthReview({ month: null }))).toBe(
+      'No repair that could have come back was done in that month. Choose another one.',
+    );
+  });
+
   it('says from when the first month can be judged', () => {
     const rows = [
       rateRow('2026-06', 3, 40, { maturing: true }),

@@ -3,6 +3,7 @@ import { Select } from './select';
 type Props = {
   /** 'YYYY-MM', oldest first. */
   months: readonly string[];
+  /** Empty where the month in question is none of them. */
   value: string;
   onChange: (month: string) => void;
   format: (month: string) => string;
@@ -16,6 +17,7 @@ export function MonthPicker({ months, value, onChange, format, label = 'Month' }
       look="picker"
       label={label}
       value={value}
+      placeholder="Choose a month"
       onChange={onChange}
       options={[...months].reverse().map((month) => ({ value: month, label: format(month) }))}
     />

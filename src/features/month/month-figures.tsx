@@ -4,18 +4,22 @@ import type { HelpAnchor } from '../../help-anchors';
 import { HowComputed } from '../../components/ui/how-computed';
 import { Sheet } from '../../components/ui/sheet';
 import type { Formats } from '../../lib/format';
+import { monthInWords } from './month-words';
 
 type Props = { review: MonthReview; formats: Formats };
 
 /** Cured at the first visit, and what coming back costs. */
 export function MonthFigures({ review, formats }: Props) {
   const { firstVisitCure: cure, costCents, costOfComebacks } = review;
+  if (review.month === null) return null;
+  const month = monthInWords(review, formats);
+  const isOpen = review.rows.some((row) => row.month === review.month && row.maturing);
   return (
-    <Sheet title="Besides">
+    <Sheet title={`The work of ${month}`}>
       <dl className="flex flex-col gap-3">
         <Figure label="Cured at the first visit" how="first-visit-cure">
           {cure.of === 0 ? (
-            'No trouble is old enough to judge.'
+            'No trouble of this month is old enough to judge.'
           ) : (
             <>
               <strong className="font-heading">{formats.percent(cure.cured / cure.of)}</strong> of{' '}
@@ -23,14 +27,14 @@ export function MonthFigures({ review, formats }: Props) {
             </>
           )}
         </Figure>
-        <Figure label="What comebacks cost" how="comeback-cost">
+        <Figure label="What its comebacks cost" how="comeback-cost">
           {costOfComebacks === 0 ? (
             'None to count.'
           ) : (
             <>
-              <strong className="font-heading">{formats.wholeMoney(costCents)}</strong> for{' '}
-              {formats.counted(costOfComebacks, 'comeback')}: labor given away, parts not paid, pick-up. Not a
-              booked figure.
+              <strong className="font-heading">{formats.wholeMoney(costCents)}</strong>
+              {isOpen && ' so far'} for {formats.counted(costOfComebacks, 'comeback')}: labor given away,
+              parts not paid, pick-up. Not a booked figure.
             </>
           )}
         </Figure>

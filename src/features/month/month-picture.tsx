@@ -16,7 +16,8 @@ type Props = { review: MonthReview; formats: Formats };
 
 /** Two years by month: what came back, what chance allows, what is still open. */
 export function MonthPicture({ review, formats }: Props) {
-  const { rows, center, windowDays, unidentified, repairsInAll } = review;
+  const { center, windowDays, unidentified, repairsInAll } = review;
+  const rows = shownRows(review);
   const title = `Came back within ${windowDays} days, by month the work was done`;
   const hasLimits = rows.some((row) => row.limits !== null);
   const hasMaturing = rows.some((row) => row.maturing);
@@ -60,6 +61,19 @@ export function MonthPicture({ review, formats }: Props) {
       }
     />
   );
+}
+
+const MONTHS_SHOWN = 24;
+const AFTER_AN_OLD_ONE = 6;
+
+/** Two years and what is still open; for a month before them, two years that end a little after it. */
+function shownRows({ rows, month }: MonthReview): readonly RateRow[] {
+  const open = rows.filter((row) => row.maturing).length;
+  const start = Math.max(0, rows.length - open - MONTHS_SHOWN);
+  const chosen = rows.findIndex((row) => row.month === month);
+  if (chosen === -1 || chosen >= start) return rows.slice(start);
+  const end = Math.min(rows.length, chosen + AFTER_AN_OLD_ONE);
+  return rows.slice(Math.max(0, end - MONTHS_SHOWN), end);
 }
 
 function point(row: RateRow, month: string, review: MonthReview, formats: Formats): MonthPoint {

@@ -68,6 +68,9 @@ function NothingToJudge({ review, formats }: { review: MonthReview; formats: For
       </Finding>
     );
   }
+  if (review.rows.some((row) => !row.maturing)) {
+    return <Finding>No repair that could have come back was done in that month. Choose another one.</Finding>;
+  }
   const size = review.rows.reduce((sum, row) => sum + row.size, 0);
   const count = review.rows.reduce((sum, row) => sum + row.count, 0);
   const first = review.rows[0]?.month;

@@ -39,10 +39,10 @@ export function Component() {
     <Page
       title="This month"
       pickers={
-        review.month !== null && (
+        months.length > 0 && (
           <MonthPicker
             months={months}
-            value={review.month}
+            value={review.month ?? ''}
             format={formats.month}
             onChange={(month) => setSearch({ month }, { preventScrollReset: true })}
           />
