@@ -11,8 +11,8 @@ export type ExaminedPair = {
   model: number;
   a: number;
   b: number;
-  /** Episodes of the units where the two were within the window; elsewhere each stands alone. */
-  episodes: PairEpisode[];
+  /** Units where the two were within the window; elsewhere each stands alone. */
+  units: number[];
   evidence: PairEvidence;
   linkedVisits: number;
   /** Replacements of A, of B in the episodes with both. */
@@ -83,7 +83,6 @@ const examinePair = (
 ): ExaminedPair => {
   const { a, b } = pair;
   const { history } = examined;
-  const episodes: PairEpisode[] = [];
   const evidence: PairEvidence = {
     withA: examined.chains.get(a) ?? 0,
     withB: examined.chains.get(b) ?? 0,
@@ -105,8 +104,7 @@ const examinePair = (
   for (const unitAt of pair.units) {
     const unit = history.units[unitAt];
     if (!unit) continue;
-    for (const episode of pairEpisodes(unit, unitAt, pairSteps(unit, a, b), windowDays)) {
-      episodes.push(episode);
+    for (const episode of pairEpisodes(unit, pairSteps(unit, a, b), windowDays)) {
       if (!episode.hasA || !episode.hasB) continue;
       const first = episode.steps[0];
       if (first?.hasA && first.hasB) evidence.together += 1;
@@ -133,13 +131,13 @@ const examinePair = (
   const { ages, between, failures } = examined;
   evidence.expectedAFirst = expectedAfter(history, ages, between, failures, a, b, windowDays);
   evidence.expectedBFirst = expectedAfter(history, ages, between, failures, b, a, windowDays);
-  return { model, a, b, episodes, evidence, linkedVisits, aLinked, bLinked };
+  return { model, a, b, units: pair.units, evidence, linkedVisits, aLinked, bLinked };
 };
 
 /** Every pair of every model that was ever near each other, with what the records say of it. */
 export const examine = (histories: Histories, windowDays: number): Examined => {
   const clock = chooseClock(histories);
-  const ages = histories.models.map((model) => unitAges(model, unitClocks(model, clock)));
+  const ages = histories.models.map((model) => unitAges(model, unitClocks(model, clock), windowDays));
   const hazards = fitHazards(histories, ages);
   const models = histories.models.map((history, at): ExaminedModel => {
     const failures = failureIndex(history);

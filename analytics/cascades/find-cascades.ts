@@ -5,7 +5,7 @@ import { examine } from './examine';
 import { toFinding } from './finding';
 import type { Histories } from './histories';
 import { buildHistories } from './histories';
-import { directedEpisodes, toCases } from './pair-view';
+import { episodesOf, toCases } from './pair-view';
 import type { JudgedName } from './pool';
 import { poolModels } from './pool';
 import type { Selected } from './select';
@@ -20,7 +20,7 @@ import type {
 } from './types';
 import { validateCascades } from './validate';
 
-/** So many case files at most, the ones with most episodes first. */
+/** So many case files at most. */
 const MOST_CASE_FILES = 200;
 /** A pair is worth a file from so many episodes on. */
 const FILE_EPISODES = 2;
@@ -83,27 +83,40 @@ const lenders = (selected: Selected, names: readonly JudgedName[], histories: Hi
     .sort(byText);
 };
 
+/** The pairs likeliest to be something that are not found to be. */
 const caseFilesOf = (
   examined: Examined,
   components: readonly string[],
   windowDays: number,
+  names: readonly JudgedName[],
   found: ReadonlySet<unknown>,
 ): CascadeCaseFile[] =>
-  examined.models
-    .flatMap((model) => model.pairs.map((pair) => ({ model, pair })))
-    .map(({ model, pair }) => {
-      const { aFirst, bFirst, together } = pair.evidence;
-      return { model, pair, episodes: aFirst + bFirst + together };
+  names
+    .flatMap(({ byModel }) => [...byModel.values()])
+    .map((judged) => {
+      const { aFirst, bFirst, together } = judged.evidence;
+      return { ...judged, isFound: found.has(judged), episodes: aFirst + bFirst + together };
     })
-    .filter(({ pair, episodes }) => episodes >= FILE_EPISODES && !found.has(pair))
-    .sort((x, y) => y.episodes - x.episodes)
+    .filter(({ episodes, isFound }) => episodes >= FILE_EPISODES && !isFound)
+    .sort(
+      (x, y) =>
+        x.posterior.nothing - y.posterior.nothing ||
+        x.pair.model - y.pair.model ||
+        x.pair.a - y.pair.a ||
+        x.pair.b - y.pair.b,
+    )
     .slice(0, MOST_CASE_FILES)
-    .map(({ model, pair, episodes }) => ({
-      model: model.history.model,
-      components: [components[pair.a] ?? '', components[pair.b] ?? ''],
-      episodes,
-      cases: toCases(directedEpisodes(model, pair.a, pair.b, windowDays), components, false),
-    }));
+    .flatMap(({ pair, episodes }) => {
+      const model = examined.models[pair.model];
+      if (!model) return [];
+      const seen = episodesOf(model, pair.units, pair.a, pair.b, windowDays);
+      return {
+        model: model.history.model,
+        components: [components[pair.a] ?? '', components[pair.b] ?? ''],
+        episodes,
+        cases: toCases(seen, components, false),
+      };
+    });
 
 const compareFindings = (x: CascadeFinding, y: CascadeFinding) =>
   byText(x.model, y.model) ||
@@ -132,7 +145,8 @@ const compareFindings = (x: CascadeFinding, y: CascadeFinding) =>
  * 4. *Many pairs.* Each pair has one of four explanations (nothing, together, either causes the other), each with a
  *    likelihood of its counts that is wider than Poisson. Their shares over all pairs are fitted by empirical
  *    Bayes; findings are taken while the mean local false discovery rate stays within the limit (Efron 2010, ch. 5;
- *    the Bayesian form of Benjamini & Hochberg 1995). Declared chains have 0.4 of the limit, all else 0.6.
+ *    the Bayesian form of Benjamini & Hochberg 1995). Declared chains have 0.4 of the limit, all else 0.6;
+ *    all of it is for the search where no declared pair was examined.
  * 5. *Few units.* A pair of names that is something is so in an unknown share of the models (of each family, where
  *    families are given): models lend each other strength, and `borrowedFrom` names those that did. A model's own
  *    records must still lean the same way, in two or more episodes of four or more visits.
@@ -171,7 +185,7 @@ export function findCascades(visits: readonly CascadeVisit[], options: CascadeOp
     isDeclared,
     names,
   });
-  const selected = selectFindings(pooled, maxFalseDiscovery);
+  const selected = selectFindings(pooled, pairCounts.declaredPairs, maxFalseDiscovery);
   const findings = selected.flatMap((one) => {
     const { model: at } = one.judged.pair;
     const model = examined.models[at];
@@ -200,7 +214,8 @@ export function findCascades(visits: readonly CascadeVisit[], options: CascadeOp
       examined,
       components,
       windowDays,
-      new Set(selected.map(({ judged }) => judged.pair)),
+      [...pooled.declared, ...pooled.searched],
+      new Set(selected.map(({ judged }) => judged)),
     ),
     examined: counts,
     warnings: [...warnings].sort(byText),

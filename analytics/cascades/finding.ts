@@ -3,7 +3,7 @@ import { fisherExact } from '../rates/fisher-exact';
 import { poissonRateRatio } from '../rates/poisson-rate-ratio';
 import type { Interval } from '../types';
 import type { ExaminedModel } from './examine';
-import { countEpisodes, directedEpisodes, medianGaps, toCases } from './pair-view';
+import { countEpisodes, episodesOf, medianGaps, toCases, unitsWithEither } from './pair-view';
 import type { Selected } from './select';
 import type { CascadeCounts, CascadeFinding } from './types';
 
@@ -47,7 +47,13 @@ export const toFinding = (selected: Selected, context: FindingContext): CascadeF
   const { judged, kind, aCauses } = selected;
   const { a, b } = judged.pair;
   const [causal, resultant] = aCauses ? [a, b] : [b, a];
-  const episodes = directedEpisodes(model, causal, resultant, windowDays);
+  const episodes = episodesOf(
+    model,
+    unitsWithEither(model, causal, resultant),
+    causal,
+    resultant,
+    windowDays,
+  );
   const counts = countEpisodes(episodes, windowDays);
   const { expectedAFirst, expectedBFirst } = judged.evidence;
   const ordered = expectedAFirst + expectedBFirst;

@@ -10,21 +10,35 @@ const PRIOR_FAILURES = 3;
 
 /** One unit's ages: where its clock starts and ends, and when each replaced component began a new life. */
 export type UnitAges = {
-  clock: UnitClock;
+  ageAtStart: number;
   ageAtEnd: number;
+  /** Age at each occasion, and a window after it. */
+  atOccasion: number[];
+  afterWindow: number[];
   /** Ascending by component, then by age: replacements of any reason. */
   renewals: { component: number; age: number; day: number; failed: boolean }[];
 };
 
-export const unitAges = (model: ModelHistory, clocks: readonly UnitClock[]): UnitAges[] =>
+export const unitAges = (model: ModelHistory, clocks: readonly UnitClock[], windowDays: number): UnitAges[] =>
   model.units.map((unit, at) => {
     const clock = clocks[at] ?? ((day: number) => day - unit.fromDay);
-    const renewals = unit.occasions.flatMap(({ day, replaced, failed }) => {
-      const age = clock(day);
-      return replaced.map((component) => ({ component, age, day, failed: failed.includes(component) }));
-    });
+    const atOccasion = unit.occasions.map(({ day }) => clock(day));
+    const renewals = unit.occasions.flatMap(({ day, replaced, failed }, occasionAt) =>
+      replaced.map((component) => ({
+        component,
+        age: atOccasion[occasionAt] ?? 0,
+        day,
+        failed: failed.includes(component),
+      })),
+    );
     renewals.sort((a, b) => a.component - b.component || a.day - b.day);
-    return { clock, ageAtEnd: clock(unit.toDay), renewals };
+    return {
+      ageAtStart: clock(unit.fromDay),
+      ageAtEnd: clock(unit.toDay),
+      atOccasion,
+      afterWindow: unit.occasions.map(({ day }) => clock(day + windowDays)),
+      renewals,
+    };
   });
 
 /** Upper edges of the age bins, at equal numbers of failures; the last bin is open. */
@@ -59,28 +73,24 @@ type Table = { failures: Float64Array; exposure: Float64Array };
 
 const ageOfLife = (age: number, start: number) => Math.max(0, age - start);
 
-const tabulate = (
-  units: readonly { ages: UnitAges; fromAge: number }[],
-  components: number,
-  edges: number[],
-): Table => {
+const tabulate = (units: readonly UnitAges[], components: number, edges: number[]): Table => {
   const width = edges.length + 1;
   const original = new Float64Array(width);
   const table = {
     failures: new Float64Array(components * width),
     exposure: new Float64Array(components * width),
   };
-  for (const { ages, fromAge } of units) addExposure(original, 0, edges, fromAge, ages.ageAtEnd);
+  for (const { ageAtStart, ageAtEnd } of units) addExposure(original, 0, edges, ageAtStart, ageAtEnd);
   for (let component = 0; component < components; component += 1)
     table.exposure.set(original, component * width);
-  for (const { ages, fromAge } of units) {
+  for (const { ageAtStart, ageAtEnd, renewals } of units) {
     let previous = -1;
     let start = 0;
-    for (const [at, { component, age, failed }] of ages.renewals.entries()) {
+    for (const [at, { component, age, failed }] of renewals.entries()) {
       const row = component * width;
       if (component !== previous) {
-        addExposure(table.exposure, row, edges, fromAge, ages.ageAtEnd, -1);
-        addExposure(table.exposure, row, edges, fromAge, age);
+        addExposure(table.exposure, row, edges, ageAtStart, ageAtEnd, -1);
+        addExposure(table.exposure, row, edges, ageAtStart, age);
         start = 0;
       } else addExposure(table.exposure, row, edges, 0, ageOfLife(age, start));
       if (failed) {
@@ -90,8 +100,8 @@ const tabulate = (
       }
       previous = component;
       start = age;
-      if (ages.renewals[at + 1]?.component !== component)
-        addExposure(table.exposure, row, edges, 0, ages.ageAtEnd - age);
+      if (renewals[at + 1]?.component !== component)
+        addExposure(table.exposure, row, edges, 0, ageAtEnd - age);
     }
   }
   return table;
@@ -122,16 +132,7 @@ export const fitHazards = (
       });
   const edges = ageEdges(failureAges);
   const width = edges.length + 1;
-  const tables = agesOfModels.map((units, at) =>
-    tabulate(
-      units.map((ages, unitAt) => {
-        const unit = histories.models[at]?.units[unitAt];
-        return { ages, fromAge: unit ? ages.clock(unit.fromDay) : 0 };
-      }),
-      components,
-      edges,
-    ),
-  );
+  const tables = agesOfModels.map((units) => tabulate(units, components, edges));
 
   const pooledFailures = new Float64Array(components * width);
   const pooledExpected = new Float64Array(components * width);

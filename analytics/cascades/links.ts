@@ -5,7 +5,7 @@ import type { ModelHistory, Occasion, UnitHistory } from './histories';
 export type PairStep = { at: number; hasA: boolean; hasB: boolean };
 
 /** Steps of one unit joined while the gap is within the window. */
-export type PairEpisode = { unit: number; steps: PairStep[]; hasA: boolean; hasB: boolean };
+export type PairEpisode = { steps: PairStep[]; hasA: boolean; hasB: boolean };
 
 export type PairUnits = { a: number; b: number; units: number[] };
 
@@ -52,6 +52,7 @@ export const linkedPairs = (model: ModelHistory, windowDays: number, components:
 export const pairSteps = ({ occasions }: UnitHistory, a: number, b: number): PairStep[] => {
   const steps: PairStep[] = [];
   occasions.forEach(({ failed }, at) => {
+    if (failed.length === 0) return;
     const hasA = failed.includes(a);
     const hasB = failed.includes(b);
     if (hasA || hasB) steps.push({ at, hasA, hasB });
@@ -61,7 +62,6 @@ export const pairSteps = ({ occasions }: UnitHistory, a: number, b: number): Pai
 
 export const pairEpisodes = (
   unit: UnitHistory,
-  unitAt: number,
   steps: readonly PairStep[],
   windowDays: number,
 ): PairEpisode[] => {
@@ -71,7 +71,7 @@ export const pairEpisodes = (
     const day = unit.occasions[step.at]?.day ?? 0;
     let episode = episodes.at(-1);
     if (!episode || day - lastDay > windowDays) {
-      episode = { unit: unitAt, steps: [], hasA: false, hasB: false };
+      episode = { steps: [], hasA: false, hasB: false };
       episodes.push(episode);
     }
     episode.steps.push(step);
@@ -82,11 +82,11 @@ export const pairEpisodes = (
   return episodes;
 };
 
-const lastRenewalAge = (ages: UnitAges, component: number, day: number): number => {
+const lastRenewalAge = ({ renewals }: UnitAges, component: number, day: number): number => {
   let age = 0;
-  for (const renewal of ages.renewals) {
-    if (renewal.component > component) break;
-    if (renewal.component === component && renewal.day <= day) age = renewal.age;
+  for (const renewal of renewals) {
+    if (renewal.component > component || (renewal.component === component && renewal.day > day)) break;
+    if (renewal.component === component) age = renewal.age;
   }
   return age;
 };
@@ -102,13 +102,23 @@ const failedBefore = ({ occasions }: UnitHistory, component: number, at: number,
   return false;
 };
 
-const nextFailureDay = ({ occasions }: UnitHistory, component: number, at: number, stopDay: number) => {
-  for (let after = at + 1; after < occasions.length; after += 1) {
-    const occasion = occasions[after];
+/** Age up to which the second part could have been counted: window, next failure of either, end of observation. */
+const ageAtStop = (
+  unit: UnitHistory,
+  ages: UnitAges,
+  first: number,
+  second: number,
+  at: number,
+  windowDays: number,
+) => {
+  const stopDay = (unit.occasions[at]?.day ?? 0) + windowDays;
+  for (let after = at + 1; after < unit.occasions.length; after += 1) {
+    const occasion = unit.occasions[after];
     if (!occasion || occasion.day > stopDay) break;
-    if (occasion.failed.includes(component)) return occasion.day;
+    if (occasion.failed.includes(first) || occasion.failed.includes(second))
+      return ages.atOccasion[after] ?? 0;
   }
-  return Infinity;
+  return stopDay < unit.toDay ? (ages.afterWindow[at] ?? 0) : ages.ageAtEnd;
 };
 
 /**
@@ -126,20 +136,15 @@ export const expectedAfter = (
   windowDays: number,
 ): number => {
   let expected = 0;
-  const list = index.get(first) ?? [];
-  list.forEach(({ unit: unitAt, at }, position) => {
+  for (const { unit: unitAt, at } of index.get(first) ?? []) {
     const unit = model.units[unitAt];
     const own = ages[unitAt];
     const occasion = unit?.occasions[at];
-    if (!unit || !own || !occasion || occasion.failed.includes(second)) return;
-    if (failedBefore(unit, second, at, windowDays)) return;
-    const next = list[position + 1];
-    const nextDay = next?.unit === unitAt ? (unit.occasions[next.at]?.day ?? Infinity) : Infinity;
-    const stopDay = Math.min(occasion.day + windowDays, nextDay, unit.toDay);
-    const toDay = Math.min(stopDay, nextFailureDay(unit, second, at, stopDay));
-    if (toDay <= occasion.day) return;
+    if (!unit || !own || !occasion || occasion.failed.includes(second)) continue;
+    if (failedBefore(unit, second, at, windowDays)) continue;
     const start = lastRenewalAge(own, second, occasion.day);
-    expected += between(second, own.clock(occasion.day) - start, own.clock(toDay) - start);
-  });
+    const fromAge = (own.atOccasion[at] ?? 0) - start;
+    expected += between(second, fromAge, ageAtStop(unit, own, first, second, at, windowDays) - start);
+  }
   return expected;
 };

@@ -6,27 +6,28 @@ import type { CascadeCase, CascadeCounts } from './types';
 export type DirectedStep = { at: number; hasCausal: boolean; hasResultant: boolean };
 export type DirectedEpisode = { unit: UnitHistory; steps: DirectedStep[] };
 
-/** Every episode of a model that has the causal or the resultant part, unit by unit. */
-export const directedEpisodes = (
+/** Every episode of the given units that has the causal or the resultant part, unit by unit. */
+export const episodesOf = (
   model: ExaminedModel,
+  units: readonly number[],
   causal: number,
   resultant: number,
   windowDays: number,
-): DirectedEpisode[] => {
-  const units = new Set(
-    [...(model.failures.get(causal) ?? []), ...(model.failures.get(resultant) ?? [])].map(({ unit }) => unit),
+): DirectedEpisode[] =>
+  units.flatMap((unitAt) => {
+    const unit = model.history.units[unitAt];
+    if (!unit) return [];
+    return pairEpisodes(unit, pairSteps(unit, causal, resultant), windowDays).map(({ steps }) => ({
+      unit,
+      steps: steps.map(({ at, hasA, hasB }) => ({ at, hasCausal: hasA, hasResultant: hasB })),
+    }));
+  });
+
+/** Units of a model in which either part failed. */
+export const unitsWithEither = ({ failures }: ExaminedModel, a: number, b: number): number[] =>
+  [...new Set([...(failures.get(a) ?? []), ...(failures.get(b) ?? [])].map(({ unit }) => unit))].sort(
+    (x, y) => x - y,
   );
-  return [...units]
-    .sort((x, y) => x - y)
-    .flatMap((unitAt) => {
-      const unit = model.history.units[unitAt];
-      if (!unit) return [];
-      return pairEpisodes(unit, unitAt, pairSteps(unit, causal, resultant), windowDays).map(({ steps }) => ({
-        unit,
-        steps: steps.map(({ at, hasA, hasB }) => ({ at, hasCausal: hasA, hasResultant: hasB })),
-      }));
-    });
-};
 
 const dayOf = ({ unit }: DirectedEpisode, step: DirectedStep | undefined) =>
   unit.occasions[step?.at ?? 0]?.day ?? 0;

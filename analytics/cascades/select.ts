@@ -10,7 +10,7 @@ export type Selected = {
   qValue: number;
 };
 
-/** The two limits sum to the limit of the whole. */
+/** The two limits sum to the limit of the whole; where nothing declared was examined, all of it is for the search. */
 const DECLARED_SHARE = 0.4;
 /** Nothing is claimed of a pair that is one of its kind less surely than so many limits (0.2 at 0.05; Efron 2010, 5.2). */
 const LOCAL_LIMITS = 4;
@@ -22,10 +22,13 @@ type Candidate = Omit<Selected, 'qValue'>;
 const isAboveFloor = ({ pair, evidence: e }: JudgedPair) =>
   e.aFirst + e.bFirst + e.together >= FLOOR.episodes && pair.linkedVisits >= FLOOR.visits;
 
-/** The model's own records must lean the same way: what others lend does not turn them round. */
+/**
+ * The model's own records must not lean the other way: what others lend does not turn them round. An even or
+ * nearly even split passes only beside episodes that began with both.
+ */
 const leansTo = ({ evidence: e }: JudgedPair, aCauses: boolean) => {
   const [cureLater, cureFirst] = aCauses ? [e.bFirst, e.aFirst] : [e.aFirst, e.bFirst];
-  return cureLater > cureFirst || (cureLater === 0 && cureFirst === 0);
+  return cureLater > cureFirst || (e.together >= 2 && cureFirst <= cureLater + 1);
 };
 
 const compare = (x: Candidate, y: Candidate) =>
@@ -45,8 +48,12 @@ const withQ = (candidates: Candidate[], share: number): Selected[] => {
   });
 };
 
-const selectFrom = (names: readonly JudgedName[], declared: boolean, limit: number): Selected[] => {
-  const share = declared ? DECLARED_SHARE : 1 - DECLARED_SHARE;
+const selectFrom = (
+  names: readonly JudgedName[],
+  declared: boolean,
+  share: number,
+  limit: number,
+): Selected[] => {
   const eligible = names.flatMap(({ byModel }) => [...byModel.values()]).filter(isAboveFloor);
   const directed = eligible.flatMap((judged): Candidate[] => {
     const { posterior } = judged;
@@ -71,5 +78,12 @@ const selectFrom = (names: readonly JudgedName[], declared: boolean, limit: numb
 
 export const selectFindings = (
   pooled: { declared: readonly JudgedName[]; searched: readonly JudgedName[] },
+  declaredPairs: number,
   limit: number,
-): Selected[] => [...selectFrom(pooled.declared, true, limit), ...selectFrom(pooled.searched, false, limit)];
+): Selected[] => {
+  const declaredShare = declaredPairs > 0 ? DECLARED_SHARE : 0;
+  return [
+    ...selectFrom(pooled.declared, true, declaredShare, limit),
+    ...selectFrom(pooled.searched, false, 1 - declaredShare, limit),
+  ];
+};
