@@ -52,7 +52,7 @@ const CARELESS_CLUTCHES = 26;
 
 function pickCareless(fleet: readonly Unit[], asOfDay: number, seed: number): Map<number, number> {
   const random = createRandom(seed, 'bad month');
-  const { firstDay, lastDay } = latestMatureMonth(asOfDay, 92);
+  const { firstDay, lastDay } = latestMatureMonth(asOfDay, 90);
   const clutchModels = modelsOfFamily(CHAINS[0]?.family ?? '');
   const able = fleet.filter(
     (unit) => unit.inRegister && clutchModels.has(unit.model.model) && unit.inServiceDay < firstDay - 200,
@@ -106,6 +106,6 @@ export function simulateMillrace({ asOf, seed = 4600 }: SimulationOptions): Mill
         isHere: yearsAgo[1] === 0,
       })),
     },
-    truth: truthOf(numbered, monthOf(latestMatureMonth(asOfDay, 92).firstDay), CLUTCH_SUPERSESSION),
+    truth: truthOf(numbered, monthOf(latestMatureMonth(asOfDay, 90).firstDay), CLUTCH_SUPERSESSION),
   };
 }
