@@ -18,10 +18,13 @@ const monthOf = (search: URLSearchParams) => search.get('month') ?? undefined;
 
 export async function loader({ request }: LoaderFunctionArgs) {
   const { searchParams } = new URL(request.url);
+  const review = queryClient.query({ ...monthReviewQuery(monthOf(searchParams)), staleTime: 'static' });
+  // Both are under way at once; a refusal is looked at only by whoever may see the page.
+  review.catch(() => undefined);
   const session = await queryClient.query({ ...sessionQuery, staleTime: 'static' });
   // The counter has no figures to review: repairs are what they come for.
   if (!can(session.shop.role, 'rates')) throw redirect(paths.repairs());
-  await queryClient.query({ ...monthReviewQuery(monthOf(searchParams)), staleTime: 'static' });
+  await review;
   return null;
 }
 
