@@ -78,11 +78,11 @@ export function findTakenAlong(tx: Transaction, componentId: string, modelIds: r
     }),
     sql`SELECT g.id AS "findingId", json_build_object('id', c.id, 'name', c.name) AS component,
       CASE WHEN m.id IS NULL THEN NULL ELSE json_build_object('id', m.id, 'name', ${modelName}) END AS model,
-      (g.detail->>'withBoth')::int AS both, (g.detail->>'episodes')::int AS episodes
+      (g.detail->>'withBoth')::int AS "both", (g.detail->>'episodes')::int AS episodes
     FROM findings g JOIN components c ON c.shop_id = g.shop_id AND c.id = g.resultant_component_id
     LEFT JOIN models m ON m.shop_id = g.shop_id AND m.id = g.model_id
     WHERE g.causal_component_id = ${componentId} AND g.kind = 'cascade'
       ${modelIds === null ? sql.empty() : sql`AND g.model_id = ANY(${idList(modelIds)})`}
-    ORDER BY both DESC, g.id`,
+    ORDER BY "both" DESC, g.id`,
   );
 }

@@ -89,7 +89,7 @@ function figuresOf(
     pattern,
     kaplanMeier: curveOf(observations),
     weibull,
-    atRiskAt: numbersAtRisk(observations),
+    atRiskAt: numbersAtRisk(observations, options.clock),
     numbers,
     comparison: newestAgainstOlder(all, numbers, options),
   };
