@@ -8,7 +8,7 @@ import { openServiceDatabase, requireBoundRole } from './db/client';
 import { migrateDatabase } from './db/migrate';
 import { DEMO_PASSWORD, demoSignIns, loadDemoIfEmpty } from './demo/load';
 import type { Deps } from './deps';
-import { recoverImports } from './imports/recover';
+import { recoverImports } from './imports/recover-imports';
 import { recoverAnalyses } from './jobs/analysis/recover';
 import { openQueues } from './jobs/queue';
 import { createJobSender } from './jobs/sender';

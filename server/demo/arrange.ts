@@ -17,6 +17,23 @@ export async function arrangeShop(tx: Transaction, shopId: string, shop: Millrac
   await nameTechnicians(tx, shop);
 }
 
+/** Said once for each component, it settles the lines that give no reason; belts, blades and the like stay unsaid. */
+export async function sayHowReplaced(tx: Transaction): Promise<void> {
+  for (const component of COMPONENTS) {
+    await tx
+      .update(components)
+      .set({ kind: kindOf(component) })
+      .where(eq(components.name, component.name));
+  }
+}
+
+const ELECTRIC: readonly string[] = ['PTO drive', 'charging', 'starting', 'safety circuit', 'ignition'];
+
+function kindOf({ life, servicedShare, system }: Component): string {
+  if (!life) return 'service_item';
+  return servicedShare === undefined && ELECTRIC.includes(system) ? 'only_when_bad' : 'depends';
+}
+
 async function saveFamilies(tx: Transaction, shopId: string, shop: Millrace): Promise<void> {
   const known = await tx.select({ id: models.id, maker: models.maker, model: models.model }).from(models);
   for (const family of shop.families) {

@@ -10,7 +10,7 @@ import type { Deps } from '../deps';
 import { importFile } from '../imports/import-file';
 import { requestAnalysis } from '../jobs/request-analysis';
 import { BCRYPT_COST, todayIn } from '../resources/session/service';
-import { arrangeShop, decideOldComebacks } from './arrange';
+import { arrangeShop, decideOldComebacks, sayHowReplaced } from './arrange';
 import { toCsv } from './csv';
 import { PART_COLUMNS, REPAIR_COLUMNS, UNIT_COLUMNS } from './native-rows';
 import { simulateMillrace, type Millrace } from './simulate-millrace';
@@ -112,6 +112,7 @@ async function importRecords(deps: Deps, shopId: string, userId: string, shop: M
       if (done.status !== 'done' || done.rejected > 0) {
         throw new Error(`The demo's ${kind} did not go in: ${done.error ?? `${done.rejected} rejected`}`);
       }
+      if (kind === 'parts') await withShop(deps.database, shopId, sayHowReplaced);
     }
   } finally {
     await rm(folder, { recursive: true, force: true });

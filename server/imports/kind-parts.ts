@@ -92,7 +92,7 @@ async function settle(client: pg.PoolClient): Promise<number> {
     CREATE TEMP TABLE accepted ON COMMIT DROP AS
     SELECT DISTINCT ON (maker_key, number_key) * FROM staged_parts s
     WHERE NOT EXISTS (SELECT FROM rejected r WHERE r.ordinal = s.ordinal) ORDER BY maker_key, number_key, ordinal`);
-  await client.query('ANALYZE accepted');
+  await client.query('ANALYZE accepted (maker_key, number_key, component_key)');
   return rowCount ?? 0;
 }
 
@@ -109,9 +109,9 @@ async function apply(client: pg.PoolClient): Promise<Counts> {
     updateNoted(
       'components',
       `SELECT c.id, s.system FROM components c JOIN (
-         SELECT DISTINCT ON (component_key) component_key, lower(btrim(system)) AS system FROM accepted
+         SELECT DISTINCT ON (component_key) component_key, btrim(system) AS system FROM accepted
          WHERE component_key IS NOT NULL AND system IS NOT NULL ORDER BY component_key, ordinal DESC
-       ) s ON s.component_key = c.name_key WHERE c.shop_id = ${SHOP} AND c.system <> s.system`,
+       ) s ON s.component_key = c.name_key WHERE c.shop_id = ${SHOP} AND lower(c.system) <> lower(s.system)`,
       ['system'],
     ),
   );
