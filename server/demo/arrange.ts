@@ -1,6 +1,7 @@
 import { eq, inArray, sql } from 'drizzle-orm';
 import type { Transaction } from '../db/client';
 import {
+  components,
   families,
   familyModels,
   memberships,
@@ -9,6 +10,7 @@ import {
   technicians,
   users,
 } from '../db/schema/index';
+import { COMPONENTS, type Component } from './components';
 import type { Millrace } from './simulate-millrace';
 
 /** What a shop's people would have told the program: which models share what, and whom the initials mean. */
