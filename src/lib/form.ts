@@ -1,6 +1,7 @@
 import type { FieldValues, Path, Resolver, UseFormSetError } from 'react-hook-form';
 import type { z } from 'zod';
 import { ApiError } from './api';
+import { plainError } from './plain-errors';
 
 /**
  * Checks a form against a schema of `shared`, which is fetched at the first check: zod stays out of the first load.
@@ -14,7 +15,7 @@ export function lazyResolver<Values extends FieldValues>(
       import('zod'),
       import('@hookform/resolvers/zod'),
     ]);
-    config({ jitless: true });
+    config({ jitless: true, customError: plainError });
     const schema = (await load()) as z.ZodType<FieldValues, FieldValues>;
     return (zodResolver(schema) as unknown as Resolver<Values>)(values, context, options);
   };

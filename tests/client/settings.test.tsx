@@ -62,8 +62,12 @@ describe('shop settings', () => {
     const { asked } = await renderPage('/settings/shop', { 'GET /shop': SHOP });
     await screen.findByLabelText('Name');
     write('Currency', 'dollars');
+    write(/Days within which/, '');
+    write(/Door rate/, '1000000');
     fireEvent.click(screen.getByRole('button', { name: 'Save' }));
     expect(await screen.findByText('Three capital letters, such as USD.')).toBeTruthy();
+    expect(screen.getByText('Write a number.')).toBeTruthy();
+    expect(screen.getByText('This must be 1000000 or less.')).toBeTruthy();
     expect(screen.getByLabelText('Currency').getAttribute('aria-invalid')).toBe('true');
     expect(sent(asked, 'PATCH')).toHaveLength(0);
   });
@@ -105,6 +109,7 @@ describe('people', () => {
     const dialog = within(screen.getByRole('dialog', { name: 'Invite someone' }));
     fireEvent.click(dialog.getByRole('button', { name: 'Send the invitation' }));
     expect(await dialog.findByText('This is not an e-mail address.')).toBeTruthy();
+    expect(dialog.getByText('This cannot be empty.')).toBeTruthy();
     fireEvent.change(dialog.getByLabelText('Name'), { target: { value: 'Bo Lind' } });
     fireEvent.change(dialog.getByLabelText('E-mail'), { target: { value: 'bo@millrace.example' } });
     fireEvent.click(dialog.getByRole('button', { name: 'Send the invitation' }));

@@ -10,7 +10,7 @@ export function MonthTick({ x, y, index, points }: Props) {
   const isTight = area.width / points.length < 14;
   const monthNumber = Number(point.month.slice(5));
   const isShown = !isTight || monthNumber % 3 === 1;
-  const hasYear = monthNumber === 1 || (index === 0 && monthNumber < 10);
+  const hasYear = monthNumber === 1 || (index === 0 && monthNumber < (isTight ? 7 : 10));
   return (
     <g className="text-xs" aria-hidden="true">
       {isShown && (

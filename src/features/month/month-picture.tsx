@@ -10,7 +10,7 @@ const MonthChart = lazy(() =>
   import('../../components/charts/month-chart').then((module) => ({ default: module.MonthChart })),
 );
 
-const HEIGHT_PX = 320;
+const HEIGHT_PX = 360;
 
 type Props = { review: MonthReview; formats: Formats };
 
