@@ -33,13 +33,13 @@ export async function compareLines(client: pg.PoolClient, given: readonly string
   await client.query(`
     CREATE TEMP TABLE old_lines ON COMMIT DROP AS ${numbered(`
       SELECT l.id, l.repair_id, l.position, ${COLUMNS.map((column) => `l.${column}`).join(', ')}, ${print} AS print
-      FROM repair_lines l JOIN targets t ON t.repair_id = l.repair_id
-      WHERE l.shop_id = ${SHOP} AND t.is_known AND t.has_lines`)}`);
+      FROM repair_lines l
+      WHERE l.shop_id = ${SHOP} AND l.repair_id IN (SELECT repair_id FROM targets WHERE is_known AND has_lines)`)}`);
   await client.query(`
     CREATE TEMP TABLE new_lines ON COMMIT DROP AS ${numbered(`
       SELECT n.*, ${print} AS print FROM target_lines n WHERE n.is_known`)}`);
-  await client.query('ANALYZE old_lines');
-  await client.query('ANALYZE new_lines');
+  await client.query('ANALYZE old_lines (id, repair_id, print)');
+  await client.query('ANALYZE new_lines (repair_id, position, print)');
   await client.query(`
     CREATE TEMP TABLE line_pairs ON COMMIT DROP AS
     SELECT o.id, n.repair_id, n.position FROM old_lines o JOIN new_lines n USING (repair_id, print, nth)`);

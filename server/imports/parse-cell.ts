@@ -20,6 +20,8 @@ const MOST_HOURS = 1_000_000;
 const MOST_QUANTITY = 1_000_000;
 export const MOST_CENTS = 2_000_000_000;
 const MOST_DAYS = 36_500;
+// Below space, what is not a tab or a kind of line end.
+const CONTROL = /(?![\t\n\v\f\r\u007f-\u009f])\p{Cc}/u;
 const NO_VALUE = { value: null } as const;
 
 const wrong = (message: string, mend: string): Parsed => ({ fault: { message, mend } });
@@ -65,8 +67,12 @@ export function parseText(cell: string, longest: number): Parsed {
       `is longer than ${longest.toLocaleString('en-US')} characters`,
       'Shorten it, or check that every quote mark is closed.',
     );
-  if (cell.includes('\0'))
-    return wrong('holds a NUL character', 'Take the NUL character out, or save the file again as text.');
+  if (CONTROL.test(cell)) {
+    return wrong(
+      'holds a control character, such as NUL',
+      'Take it out, or save the file again as plain text.',
+    );
+  }
   return cell.trim() === '' ? NO_VALUE : { value: cell };
 }
 

@@ -7,22 +7,23 @@ import {
   LINE_FIELDS,
   LINE_MAKING,
   REPAIR_FIELDS,
-  type LineField,
   type LineValues,
-  type RepairField,
   type RepairValues,
 } from './repair-fields';
 import { isReturned, restoreCells } from './rejected-cells';
 import type { Brought, RepairRow } from './stage-repairs';
 
-const isIn = <Name extends string>(names: readonly Name[], name: string): name is Name =>
-  (names as readonly string[]).includes(name);
+// Rows of one shape are what the engine is quick with.
+const NO_REPAIR: RepairValues = Object.fromEntries(REPAIR_FIELDS.map((field) => [field, null]));
+const NO_LINE: LineValues = Object.fromEntries(LINE_FIELDS.map((field) => [field, null]));
 
 /** Makes the reader of a file of repairs: what it brings, and one row after the other. */
 export function repairReader(layout: Layout, rules: CellRules) {
   const columns = COLUMNS.repairs.flatMap(({ name, type }) => {
     const at = layout.columns[name];
-    return at === undefined ? [] : [{ name, type, at }];
+    const repairField = REPAIR_FIELDS.find((field) => field === name);
+    const lineField = LINE_FIELDS.find((field) => field === name);
+    return at === undefined ? [] : [{ name, type, at, repairField, lineField }];
   });
   const has = (name: string) => layout.columns[name] !== undefined;
   const brought: Brought = {
@@ -35,19 +36,19 @@ export function repairReader(layout: Layout, rules: CellRules) {
   const read = (tableRow: TableRow, row: number): RepairRow => {
     const cells = wasReturned ? restoreCells(tableRow.cells) : tableRow.cells;
     const faults = rowFaults(tableRow, layout);
-    const repair: RepairValues = {};
-    const line: LineValues = {};
-    for (const { name, type, at } of columns) {
+    const repair: RepairValues = { ...NO_REPAIR };
+    const line: LineValues = { ...NO_LINE };
+    for (const { name, type, at, repairField, lineField } of columns) {
       const cell = cells[at];
       if (cell === undefined || cell === '') continue;
       const parsed = parseCell(cell, type, rules);
       if ('fault' in parsed) faults.push({ column: name, value: cell, ...parsed.fault });
       else if (parsed.value !== null) {
-        if (isIn<LineField>(LINE_FIELDS, name)) line[name] = parsed.value;
-        if (isIn<RepairField>(REPAIR_FIELDS, name)) repair[name] = parsed.value;
+        if (lineField) line[lineField] = parsed.value;
+        if (repairField) repair[repairField] = parsed.value;
       }
     }
-    const isLine = LINE_MAKING.some((field) => line[field] !== undefined);
+    const isLine = LINE_MAKING.some((field) => (line[field] ?? null) !== null);
     return { row, repair, line: isLine ? line : undefined, faults };
   };
   return { brought, givenLineFields, read };

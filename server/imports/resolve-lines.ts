@@ -65,7 +65,7 @@ export async function resolveLines(client: pg.PoolClient): Promise<void> {
       LEFT JOIN parts p ON p.shop_id = ${SHOP} AND p.number_key = l.part_key AND p.maker_key = ${PART_MAKER_KEY}
       ${dictionary.join}
     ) x LEFT JOIN components c ON c.shop_id = ${SHOP} AND c.id = x.component_id`);
-  await client.query('ANALYZE target_lines');
+  await client.query('ANALYZE target_lines (repair_id, is_known)');
 }
 
 const PART_MAKER_KEY = `coalesce(l.part_maker_key, nullif(t.machine_maker, ''), u.maker_key, '')`;

@@ -31,5 +31,7 @@ export async function resolveRepairs(client: pg.PoolClient): Promise<void> {
     LEFT JOIN repairs e ON e.shop_id = ${SHOP} AND e.number_key = s.number_key AND e.location_id IS NOT DISTINCT FROM l.id
     LEFT JOIN models em ON em.shop_id = ${SHOP} AND em.id = e.model_id
     LEFT JOIN units eu ON eu.shop_id = ${SHOP} AND eu.id = e.unit_id`);
-  await client.query('ANALYZE targets');
+  await client.query(
+    'ANALYZE targets (ordinal, repair_id, is_known, unit_id, machine_serial, machine_maker)',
+  );
 }

@@ -83,6 +83,8 @@ export async function partRejected(client: pg.PoolClient): Promise<number> {
   await client.query(`
     CREATE TEMP TABLE accepted ON COMMIT DROP AS
     SELECT * FROM staged_repairs s WHERE s.ordinal = s.head AND NOT EXISTS (SELECT FROM rejected r WHERE r.head = s.head)`);
-  await client.query('ANALYZE accepted');
+  await client.query(
+    'ANALYZE accepted (ordinal, location_key, number_key, serial_key, maker_key, model_key, customer_key)',
+  );
   return rowCount ?? 0;
 }

@@ -1,3 +1,4 @@
+import { isUtf8 } from 'node:buffer';
 import { createReadStream } from 'node:fs';
 import { open } from 'node:fs/promises';
 import type { Mapping } from '../../shared/imports';
@@ -65,32 +66,37 @@ export async function scanBytes(
 ): Promise<{ encoding: Encoding; lines: number | null }> {
   const marked = said ?? bomOf(await readHead(filePath));
   if (marked?.startsWith('utf-16')) return { encoding: marked, lines: null };
-  const decoder = new TextDecoder('utf-8', { fatal: true });
-  let isUtf8 = true;
-  let isQuoted = false;
+  let areUtf8 = true;
+  let rest: Buffer = Buffer.alloc(0);
+  let quotes = 0;
   let lines = 0;
   let last = NEWLINE;
-  for await (const chunk of createReadStream(filePath, { highWaterMark: 1024 * 1024 })) {
-    const bytes: Buffer = chunk;
-    for (const byte of bytes) {
-      if (byte === QUOTE) isQuoted = !isQuoted;
-      else if (byte === NEWLINE && !isQuoted) lines += 1;
+  for await (const piece of createReadStream(filePath, { highWaterMark: 1024 * 1024 })) {
+    const bytes: Buffer = piece;
+    const joined = rest.length > 0 ? Buffer.concat([rest, bytes]) : bytes;
+    const whole = wholeCharacters(joined);
+    areUtf8 &&= isUtf8(joined.subarray(0, whole));
+    rest = joined.subarray(whole);
+    let quote = bytes.indexOf(QUOTE);
+    for (let end = bytes.indexOf(NEWLINE); end >= 0; end = bytes.indexOf(NEWLINE, end + 1)) {
+      for (; quote >= 0 && quote < end; quote = bytes.indexOf(QUOTE, quote + 1)) quotes += 1;
+      if (quotes % 2 === 0) lines += 1;
     }
+    for (; quote >= 0; quote = bytes.indexOf(QUOTE, quote + 1)) quotes += 1;
     last = bytes.at(-1) ?? last;
-    isUtf8 = isUtf8 && canDecode(decoder, bytes, true);
   }
-  isUtf8 = isUtf8 && canDecode(decoder, Buffer.alloc(0), false);
-  const encoding = marked ?? (isUtf8 ? 'utf-8' : 'windows-1252');
+  const encoding = marked ?? (areUtf8 && isUtf8(rest) ? 'utf-8' : 'windows-1252');
   return { encoding, lines: last === NEWLINE ? lines : lines + 1 };
 }
 
-function canDecode(decoder: TextDecoder, bytes: Buffer, stream: boolean): boolean {
-  try {
-    decoder.decode(bytes, { stream });
-    return true;
-  } catch {
-    return false;
+/** Where the last character that may be cut off begins: up to three bytes before the end. */
+function wholeCharacters(bytes: Buffer): number {
+  for (let back = 1; back <= Math.min(3, bytes.length); back += 1) {
+    const byte = bytes[bytes.length - back] ?? 0;
+    if (byte >= 0xc0) return bytes.length - back;
+    if (byte < 0x80) break;
   }
+  return bytes.length;
 }
 
 /** The delimiter that cuts the first lines into the most columns, alike in each. */

@@ -29,6 +29,7 @@ type Fragment = Brought & {
   key: string | undefined;
   firstRow: number;
   lastRow: number;
+  isEmpty: boolean;
   values: RepairValues;
   faults: number;
 };
@@ -114,6 +115,7 @@ export class RepairStager {
       key,
       firstRow: row,
       lastRow: row,
+      isEmpty: true,
       values: {},
       faults: 0,
       isRepeated: false,
@@ -121,6 +123,11 @@ export class RepairStager {
   }
 
   #join(open: Fragment, row: number, repair: RepairValues): void {
+    if (row === open.firstRow && open.isEmpty) {
+      open.isEmpty = false;
+      open.values = { ...repair };
+      return;
+    }
     for (const field of REPAIR_FIELDS) {
       const value = repair[field] ?? null;
       if (value === null) continue;

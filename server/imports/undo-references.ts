@@ -38,8 +38,8 @@ async function referringColumns(
   const { rows } = await client.query<{ from: string; column: string }>(
     `SELECT c.conrelid::regclass::text AS from, a.attname AS column
      FROM pg_constraint c JOIN pg_attribute a ON a.attrelid = c.conrelid AND a.attnum = ANY (c.conkey) AND a.attname <> 'shop_id'
-     WHERE c.contype = 'f' AND c.confrelid = $1::regclass
-       AND (c.confdeltype IN ('a', 'r') OR c.conrelid = 'repair_technicians'::regclass AND $1 = 'technicians')`,
+     WHERE c.contype = 'f' AND c.confrelid = $1::text::regclass
+       AND (c.confdeltype IN ('a', 'r') OR c.conrelid = 'repair_technicians'::regclass AND $1::text = 'technicians')`,
     [table],
   );
   return rows;

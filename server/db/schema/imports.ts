@@ -99,7 +99,6 @@ export const importChanges = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.shopId, t.importId, t.tableName, t.rowId] }),
-    index('import_changes_row').on(t.shopId, t.rowId),
     foreignKey({
       columns: [t.shopId, t.importId],
       foreignColumns: [imports.shopId, imports.id],
