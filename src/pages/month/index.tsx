@@ -18,13 +18,10 @@ const monthOf = (search: URLSearchParams) => search.get('month') ?? undefined;
 
 export async function loader({ request }: LoaderFunctionArgs) {
   const { searchParams } = new URL(request.url);
-  const review = queryClient.query({ ...monthReviewQuery(monthOf(searchParams)), staleTime: 'static' });
-  // Both are under way at once; a refusal is looked at only by whoever may see the page.
-  review.catch(() => undefined);
   const session = await queryClient.query({ ...sessionQuery, staleTime: 'static' });
-  // The counter has no figures to review: repairs are what they come for.
+  // The counter has no figures to review: repairs are what they come for. Asking first would only be refused.
   if (!can(session.shop.role, 'rates')) throw redirect(paths.repairs());
-  await review;
+  await queryClient.query({ ...monthReviewQuery(monthOf(searchParams)), staleTime: 'static' });
   return null;
 }
 
