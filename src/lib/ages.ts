@@ -5,6 +5,8 @@ export type AgeClock = 'hours' | 'days';
 export type Ages = ReturnType<typeof agesOn>;
 
 const DAYS_PER_MONTH = 365.25 / 12;
+/** A limit so many times the estimate bounds nothing that matters. */
+const FAR = 20;
 
 /** How ages are written: on the calendar clock the API counts days, and people count months. */
 export function agesOn(clock: AgeClock, formats: Formats) {
@@ -20,12 +22,17 @@ export function agesOn(clock: AgeClock, formats: Formats) {
       isHours
         ? formats.hours(age, digitsFor(age))
         : `${formats.number(inUnit(age), digitsFor(age))}\u202fmonths`,
-    /** "262–339", to stand after an estimate that has its unit. */
-    range: ({ lower, upper }: Limits, estimate: number): string =>
-      formats.range(
-        { lower: lower === null ? null : inUnit(lower), upper: upper === null ? null : inUnit(upper) },
-        digitsFor(estimate),
-      ),
+    /** "262–339", to stand after an estimate that has its unit; a limit far beyond it says no more than "or more". */
+    range: ({ lower, upper }: Limits, estimate: number): string => {
+      const digits = digitsFor(estimate);
+      const isOpen = upper === null || upper > estimate * FAR;
+      if (isOpen && lower !== null) return `${formats.number(inUnit(lower), digits)} or more`;
+      const edges = {
+        lower: lower === null ? null : inUnit(lower),
+        upper: upper === null ? null : inUnit(upper),
+      };
+      return formats.range(edges, digits);
+    },
     /** "298", for an axis. */
     tick: (age: number): string => {
       const shown = inUnit(age);

@@ -28,8 +28,8 @@ export function CascadePicture({ cascades, pairsExamined, table, formats }: Prop
         ) : (
           <CascadeChart
             flows={flowsOf(cascades, formats)}
-            leftNote={(_, total) => formats.counted(total, 'trouble')}
-            rightNote={(_, total) => `in ${formats.count(total)} of them`}
+            leftNote={(name) => formats.counted(modelsOf(cascades, name), 'model')}
+            rightNote={(_, total) => formats.counted(total, 'trouble')}
             label={title}
           />
         )
@@ -38,6 +38,10 @@ export function CascadePicture({ cascades, pairsExamined, table, formats }: Prop
     />
   );
 }
+
+/** On how many models the component is seen to take others with it. */
+const modelsOf = (cascades: readonly Finding[], causal: string) =>
+  new Set(cascades.filter((finding) => finding.causal === causal).map(whereOf)).size;
 
 function flowsOf(cascades: readonly Finding[], formats: Formats): CascadeFlow[] {
   const pairs = new Map<string, Finding[]>();

@@ -1,5 +1,7 @@
+import { useState } from 'react';
 import { Link } from 'react-router';
 import type { FindingSummary } from '../../../shared/findings';
+import { Button } from '../../components/ui/button';
 import { HowComputed } from '../../components/ui/how-computed';
 import { Sheet } from '../../components/ui/sheet';
 import type { Formats } from '../../lib/format';
@@ -9,9 +11,13 @@ import { lowered } from './finding-words';
 type Props = { caseFiles: FindingSummary['caseFiles']; formats: Formats };
 
 const MOST_REPAIRS = 8;
+const SHOWN_FIRST = 10;
 
 /** Seen a few times and not proven: the repairs, for whoever wants to read them. */
 export function CaseFiles({ caseFiles, formats }: Props) {
+  const [isAll, setAll] = useState(false);
+  const ranked = [...caseFiles].sort((a, b) => b.times - a.times);
+  const shown = isAll ? ranked : ranked.slice(0, SHOWN_FIRST);
   return (
     <Sheet
       title={`Case files (${formats.count(caseFiles.length)})`}
@@ -19,7 +25,7 @@ export function CaseFiles({ caseFiles, formats }: Props) {
       actions={<HowComputed anchor="case-file">what is that</HowComputed>}
     >
       <ul className="-my-2">
-        {caseFiles.map(({ model, first, second, times, repairs }) => (
+        {shown.map(({ model, first, second, times, repairs }) => (
           <li
             key={`${model.id} ${first.id} ${second.id}`}
             className="border-t border-rule py-2 first:border-t-0"
@@ -44,6 +50,11 @@ export function CaseFiles({ caseFiles, formats }: Props) {
           </li>
         ))}
       </ul>
+      {shown.length < ranked.length && (
+        <Button look="text" className="mt-2 text-sm" onClick={() => setAll(true)}>
+          Show all {formats.count(ranked.length)}, those seen fewer times last
+        </Button>
+      )}
     </Sheet>
   );
 }

@@ -30,16 +30,19 @@ export function EpisodePicture({ finding, clock: asked, isAll, choose, formats }
   const clock = asked ?? usualClock(cases);
   const known = drawable(cases, clock);
   const shown = isAll ? known : evenly(known, SHOWN_FIRST);
-  const left = cases.length - known.length;
+  const atOnce = cases.filter(({ visits }) => visits.length === 1).length;
+  const withoutHours = cases.length - atOnce - known.length;
   const title = 'The troubles behind it';
   return (
     <ChartFrame
       title={title}
-      sub={`one line is one machine, in ${clock === 'hours' ? 'running hours' : 'days'} since its first visit; the line ends where the trouble ended${
-        left > 0
-          ? ` · ${formats.count(left)} of ${formats.count(cases.length)} have no hours and are not drawn`
-          : ''
-      }`}
+      sub={[
+        `one line is one machine, in ${clock === 'hours' ? 'running hours' : 'days'} since its first visit; it ends where the trouble ended`,
+        atOnce > 0 ? `${formats.counted(atOnce, 'trouble')} took one visit and have no line` : '',
+        withoutHours > 0 ? `${formats.count(withoutHours)} have no hours` : '',
+      ]
+        .filter(Boolean)
+        .join(' · ')}
       how="cascade"
       heightPx={shown.length * ROW_PX + 60}
       actions={
@@ -55,7 +58,11 @@ export function EpisodePicture({ finding, clock: asked, isAll, choose, formats }
       }
       chart={
         shown.length === 0 ? (
-          <p className="text-dim">None has hours at every visit; choose days.</p>
+          <p className="text-dim">
+            {withoutHours > 0
+              ? 'None has hours at every visit; choose days.'
+              : 'Each took one visit: there is nothing to draw.'}
+          </p>
         ) : (
           <EpisodeChart
             rows={shown.map((episode, index) =>

@@ -12,7 +12,8 @@ const ENOUGH_WITH_HOURS = 0.8;
 
 const hasHours = (episode: Episode) => episode.visits.every(({ hoursIn }) => hoursIn !== null);
 
-export function usualClock(cases: readonly Episode[]): EpisodeClock {
+export function usualClock(all: readonly Episode[]): EpisodeClock {
+  const cases = all.filter(({ visits }) => visits.length > 1);
   return cases.filter(hasHours).length >= cases.length * ENOUGH_WITH_HOURS ? 'hours' : 'days';
 }
 
@@ -22,10 +23,10 @@ const placeOf = (visit: Episode['visits'][number], clock: EpisodeClock): number 
 const lengthOf = (episode: Episode, clock: EpisodeClock): number =>
   Math.max(0, ...episode.visits.map((visit) => placeOf(visit, clock)));
 
-/** Those that can be drawn on this clock: for, against, neutral; each the longest first. */
+/** Those that can be drawn on this clock: for, against, neutral; each the longest first. One visit is no line. */
 export function drawable(cases: readonly Episode[], clock: EpisodeClock): Episode[] {
   return cases
-    .filter((episode) => clock === 'days' || hasHours(episode))
+    .filter((episode) => episode.visits.length > 1 && (clock === 'days' || hasHours(episode)))
     .sort(
       (a, b) =>
         SPEAKS.indexOf(a.speaks) - SPEAKS.indexOf(b.speaks) || lengthOf(b, clock) - lengthOf(a, clock),

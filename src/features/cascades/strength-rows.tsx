@@ -87,7 +87,7 @@ function firstRow(finding: FindingWhole, formats: Formats): StrengthRow {
     answer:
       apart.length === 0
         ? 'Never at different visits.'
-        : `${apart.join(', ')} apart, half of the time or less. What is replaced first is not what failed first.`,
+        : `Half of them within ${apart.join(' and ')} of each other. What is replaced first is not what failed first.`,
   };
 }
 

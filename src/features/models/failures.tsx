@@ -13,6 +13,8 @@ type Row = ModelWhole['components'][number];
 type Props = { model: ModelWhole; formats: Formats };
 
 const MOST_BARS = 12;
+/** Below so many failures an age by which half are gone is a guess. */
+const FEW_FAILURES = 6;
 
 /** What fails on the model: as bars, and as a table with how long each lasts. */
 export function Failures({ model, formats }: Props) {
@@ -104,10 +106,11 @@ function columnsOf(model: ModelWhole, formats: Formats): Column<Row>[] {
     {
       id: 'half',
       header: 'Half gone by',
-      value: (row) => row.halfBy,
+      value: (row) => (row.failures < FEW_FAILURES ? null : row.halfBy),
       align: 'right',
       cell: (row) => {
-        if (row.halfBy === null) return <span className="text-dim">–</span>;
+        if (row.halfBy === null || row.failures < FEW_FAILURES)
+          return <span className="text-dim">too few</span>;
         const ages = agesOn(row.clock, formats);
         return `${ages.of(row.halfBy)} (${ages.range(row.halfByInterval, row.halfBy)})`;
       },

@@ -1,4 +1,5 @@
 import type { ModelListed, ModelWhole } from '../../../shared/machines';
+import { exactBinomialLimits } from '../../../analytics/rates/exact-binomial-limits';
 import type { RateRow } from '../../../shared/reports';
 
 type ModelComponent = ModelWhole['components'][number];
@@ -25,6 +26,16 @@ export function standsOut(row: RateRow | undefined): 'over' | 'under' | null {
 export function shareOfAll(rows: readonly Pick<RateRow, 'count' | 'size'>[]): number | null {
   const size = rows.reduce((sum, row) => sum + row.size, 0);
   return size === 0 ? null : rows.reduce((sum, row) => sum + row.count, 0) / size;
+}
+
+/** What chance allows around the shop's share, for each row's own number of jobs. */
+export function withLimits(rows: readonly RateRow[]): RateRow[] {
+  const share = shareOfAll(rows);
+  return rows.map((row) => {
+    if (row.limits !== null || row.size === 0 || share === null) return row;
+    const { lower, upper } = exactBinomialLimits(row.size, share);
+    return { ...row, limits: { lower: lower / row.size, upper: upper / row.size } };
+  });
 }
 
 export const mostFailures = <Row extends Pick<ModelListed, 'failures'>>(

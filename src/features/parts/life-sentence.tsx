@@ -4,6 +4,7 @@ import { Finding, Over, Strong } from '../../components/ui/finding';
 import type { Ages } from '../../lib/ages';
 import type { Formats } from '../../lib/format';
 import { bLifeOf, FEW_FAILURES, oldestSeen, reachedWithoutFailure, scopeWords } from './life-words';
+import { lineFit } from './line-fit';
 import { NumberComparison } from './number-comparison';
 
 type Props = {
@@ -38,11 +39,19 @@ export function LifeSentence(props: Props) {
       </Finding>
     );
   }
+  const isRough = life.failures < FEW_FAILURES;
+  const hasStart = startWords(life, reasons) !== '';
+  const opening = (word: string) => (hasStart ? word : capital(word));
   return (
     <Finding>
       {start}
-      {life.failures < FEW_FAILURES && <>only {counts} failed, which gives no more than a rough figure: </>}
-      <Pattern pattern={life.pattern} failures={life.failures} formats={formats} />: <Gone {...props} />.
+      {isRough && (
+        <>
+          {opening('only')} {counts} failed, which gives no more than a rough figure:{' '}
+        </>
+      )}
+      <Pattern life={life} it={isRough ? 'it' : opening('it')} formats={formats} />: <Gone {...props} />.
+      {isLineLoose(life) && ' The fitted line misses many of these failures: trust the steps.'}
       {life.comparison && <NumberComparison comparison={life.comparison} formats={formats} />}
     </Finding>
   );
@@ -50,16 +59,28 @@ export function LifeSentence(props: Props) {
 
 /** Whatever the figure holds under, before it. */
 function Start({ life, reasons }: Pick<Props, 'life' | 'reasons'>) {
-  const parts = [
+  const text = startWords(life, reasons);
+  return text === '' ? null : <>{`${capital(text)}: `}</>;
+}
+
+function startWords(life: PartLife, reasons: Props['reasons']): string {
+  return [
     scopeWords(life),
     life.amongThoseThatCameIn ? 'among machines that came in' : '',
     reasons === 'allFailed' ? 'if every replacement without a reason was a failure' : '',
     reasons === 'noneFailed' ? 'if no replacement without a reason was a failure' : '',
-  ].filter(Boolean);
-  if (parts.length === 0) return null;
-  const text = parts.join(', ');
-  return <>{`${text.charAt(0).toUpperCase()}${text.slice(1)}: `}</>;
+  ]
+    .filter(Boolean)
+    .join(', ');
 }
+
+/** More misses than the one in twenty that limits allow, and then some. */
+function isLineLoose(life: PartLife): boolean {
+  const fit = lineFit(life);
+  return fit !== null && fit.missed > fit.judged * 0.1;
+}
+
+const capital = (text: string) => `${text.charAt(0).toUpperCase()}${text.slice(1)}`;
 
 function NothingFollowed({ life, formats, isAssumed, assumeLink }: Props) {
   const scope = scopeWords(life);
@@ -98,38 +119,30 @@ function NoneFailed({ life, formats, ages, reasons, isAssumed }: Props) {
   );
 }
 
-function Pattern({
-  pattern,
-  failures,
-  formats,
-}: {
-  pattern: PartLife['pattern'];
-  failures: number;
-  formats: Formats;
-}) {
-  switch (pattern) {
+function Pattern({ life, it, formats }: { life: PartLife; it: string; formats: Formats }) {
+  switch (life.pattern) {
     case 'young':
       return (
         <>
-          it <Over>fails young</Over>
+          {it} <Over>fails young</Over>
         </>
       );
     case 'wears_out':
       return (
         <>
-          it <Strong>wears out</Strong>
+          {it} <Strong>wears out</Strong>
         </>
       );
     case 'no_pattern':
       return (
         <>
-          it fails <Strong>at any age alike</Strong>
+          {it} fails <Strong>at any age alike</Strong>
         </>
       );
     default:
       return (
         <>
-          {formats.counted(failures, 'failure')} <Strong>cannot tell</Strong> whether it wears out
+          {formats.counted(life.failures, 'failure')} <Strong>cannot tell</Strong> whether it wears out
         </>
       );
   }

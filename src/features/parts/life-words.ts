@@ -42,7 +42,7 @@ export function timesAsOften(ratio: number): string {
   return 'more than twice as often';
 }
 
-/** The component of a sentence's start: "the PTO clutch" keeps its own capitals. */
+/** On which machines a life was followed; nothing where on all. */
 export function scopeWords({ scope }: Pick<PartLife, 'scope'>): string {
   if (scope.model) return `On the ${scope.model.name}`;
   if (scope.family) return `In the family ${scope.family.name}`;

@@ -1,6 +1,7 @@
-import { useMemo } from 'react';
+import { useMemo, useState } from 'react';
 import { Link } from 'react-router';
 import type { PartLife } from '../../../shared/parts';
+import { Button } from '../../components/ui/button';
 import { DataTable, type Column } from '../../components/ui/data-table';
 import { HowComputed } from '../../components/ui/how-computed';
 import { Sheet } from '../../components/ui/sheet';
@@ -19,19 +20,28 @@ type Props = {
   ages: Ages;
 };
 
+const SHOWN_FIRST = 5;
+
 /** The part numbers side by side, and what changes when the newer is put on. */
 export function Numbers({ numbers, only, linkTo, formats, ages }: Props) {
   const columns = useMemo(() => numberColumns(linkTo, formats, ages), [linkTo, formats, ages]);
+  const [isAll, setAll] = useState(false);
+  const ranked = [...numbers].sort((a, b) => b.failures - a.failures || b.lives - a.lives);
   const notes = numbers.filter(({ fitmentNote }) => fitmentNote !== null);
   return (
     <Sheet title="Numbers" actions={<HowComputed anchor="old-and-new-numbers">how</HowComputed>}>
       <DataTable
         caption="Part numbers"
-        rows={numbers}
+        rows={isAll ? ranked : ranked.slice(0, SHOWN_FIRST)}
         columns={columns}
         rowId={({ part }) => part.id}
         empty={<p className="text-dim">No part number was written down.</p>}
       />
+      {numbers.length > SHOWN_FIRST && !isAll && (
+        <Button look="text" className="text-sm" onClick={() => setAll(true)}>
+          {formats.count(numbers.length - SHOWN_FIRST)} more
+        </Button>
+      )}
       {only !== undefined && (
         <p className="mt-2 text-sm">
           Only {only} is shown. <Link to={linkTo()}>Show all numbers</Link>
@@ -64,10 +74,8 @@ function numberColumns(linkTo: Props['linkTo'], formats: Formats, ages: Ages): C
           <Link to={linkTo(part.name)} className="whitespace-nowrap">
             {part.name}
           </Link>
-          {firstFittedOn && (
-            <span className="block text-xs text-dim">since {formats.month(firstFittedOn.slice(0, 7))}</span>
-          )}
-          {supersededBy && <span className="block text-xs text-dim">replaced by {supersededBy.name}</span>}
+          {firstFittedOn && <span className="block text-xs text-dim">since {firstFittedOn.slice(0, 4)}</span>}
+          {supersededBy && <span className="block text-xs text-dim">now {supersededBy.name}</span>}
         </>
       ),
     },

@@ -10,6 +10,7 @@ import { Sheet } from '../../components/ui/sheet';
 import { modelColumns } from '../../features/models/model-columns';
 import { ModelsPicture } from '../../features/models/models-picture';
 import { ModelsSentence } from '../../features/models/models-sentence';
+import { withLimits } from '../../features/models/model-words';
 import { modelsQuery, rateByModelQuery } from '../../features/models/queries';
 import { queryClient } from '../../lib/query-client';
 import { can, sessionQuery, useCan, useFormats, useSession } from '../../lib/session';
@@ -38,7 +39,8 @@ export function Component() {
   const { shop } = useSession();
   const { data: models } = useSuspenseQuery(modelsQuery({ q }));
   // The counter sees no rates; for everybody else the loader has fetched them.
-  const rates = useQuery({ ...rateByModelQuery, enabled: may('rates') }).data?.data ?? null;
+  const answer = useQuery({ ...rateByModelQuery, enabled: may('rates') }).data?.data;
+  const rates = useMemo(() => (answer && answer.length > 0 ? withLimits(answer) : null), [answer]);
   const columns = useMemo(() => modelColumns(rates, formats), [rates, formats]);
 
   return (
