@@ -47,7 +47,8 @@ export async function runImport(deps: Deps, ids: Ids): Promise<void> {
   } catch (error) {
     await fail(deps, ids, error);
   } finally {
-    await removeSpooled(filePath);
+    // A file that was only tried stays for the import itself, until the sweep.
+    if (!started.isDryRun) await removeSpooled(filePath);
   }
 }
 

@@ -75,6 +75,7 @@ export class RepairStager {
     this.#staging = staging;
   }
 
+  /** Takes the row's values over. */
   add({ row, repair, line, faults }: RepairRow, brought: Brought): void {
     const key = keyOf(repair);
     const isSame = key !== undefined && this.#open?.key === key;
@@ -125,7 +126,7 @@ export class RepairStager {
   #join(open: Fragment, row: number, repair: RepairValues): void {
     if (row === open.firstRow && open.isEmpty) {
       open.isEmpty = false;
-      open.values = { ...repair };
+      open.values = repair;
       return;
     }
     for (const field of REPAIR_FIELDS) {
