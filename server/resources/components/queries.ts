@@ -44,11 +44,13 @@ export function findComponents(
       FROM repair_lines x JOIN page p ON p.shop_id = x.shop_id AND p.id = x.component_id
       JOIN repairs r ON r.shop_id = x.shop_id AND r.id = x.repair_id ${onModel}
       WHERE x.kind = 'part' AND coalesce(x.quantity, 1) > 0 GROUP BY 1
+    ), came_back AS MATERIALIZED (
+      SELECT DISTINCT e.first_id FROM ${effectiveComebacks} e WHERE e.is_counted
     ), work AS (
-      SELECT component_id, count(*)::int AS size, count(*) FILTER (WHERE f.repair_id IN (
-        SELECT e.first_id FROM ${effectiveComebacks} e WHERE e.is_counted))::int AS came_back
+      SELECT component_id, count(*)::int AS size, count(b.first_id)::int AS came_back
       FROM repair_facts f CROSS JOIN LATERAL unnest(f.trouble_component_ids) AS component_id
       JOIN repairs r ON r.shop_id = f.shop_id AND r.id = f.repair_id ${onModel}
+      LEFT JOIN came_back b ON b.first_id = r.id
       WHERE f.left_out IS NULL GROUP BY 1
     )
     SELECT c.id, c.name, c.system, c.kind, coalesce(d.fitted, 0) AS fitted, coalesce(d.failures, 0) AS failures,

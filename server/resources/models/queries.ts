@@ -34,13 +34,15 @@ export function findModels(tx: Transaction, conditions: SQL, rows: number): Prom
     ), machines AS (
       SELECT u.model_id, count(*)::int AS units FROM units u JOIN page p ON p.shop_id = u.shop_id AND p.id = u.model_id
       GROUP BY 1
+    ), came_back AS MATERIALIZED (
+      SELECT DISTINCT e.first_id FROM ${effectiveComebacks} e WHERE e.is_counted
     ), work AS (
       SELECT r.model_id, count(*)::int AS repairs,
         count(*) FILTER (WHERE f.repair_id IS NOT NULL)::int AS size,
-        count(*) FILTER (WHERE f.repair_id IS NOT NULL AND r.id IN (
-          SELECT e.first_id FROM ${effectiveComebacks} e WHERE e.is_counted))::int AS came_back
+        count(b.first_id) FILTER (WHERE f.repair_id IS NOT NULL)::int AS came_back
       FROM repairs r JOIN page p ON p.shop_id = r.shop_id AND p.id = r.model_id
       LEFT JOIN repair_facts f ON f.shop_id = r.shop_id AND f.repair_id = r.id AND f.left_out IS NULL
+      LEFT JOIN came_back b ON b.first_id = r.id
       GROUP BY 1
     ), failed AS (
       SELECT r.model_id, x.component_id, count(*)::int AS failures FROM repair_lines x

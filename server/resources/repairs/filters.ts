@@ -10,7 +10,7 @@ export type RepairFilter = Omit<z.output<typeof repairQuery>, 'limit' | 'cursor'
 /** The conditions of a repair list on alias r. Programs search no customers. */
 export function repairConditions(filter: RepairFilter, options: { searchesCustomers: boolean }): SQL {
   const { q, serial, number, maker, model, modelId, unitId, componentId, technicianId, from, to } = filter;
-  const cameBack = sql`EXISTS (SELECT FROM ${effectiveComebacks} e WHERE e.first_id = r.id AND e.is_counted)`;
+  const cameBack = sql`r.id IN (SELECT e.first_id FROM ${effectiveComebacks} e WHERE e.is_counted)`;
   return allOf([
     q?.trim() ? textCondition(q, options.searchesCustomers) : undefined,
     serial ? sql`r.unit_id IN (SELECT id FROM units WHERE serial_key = ${foldText(serial)})` : undefined,
@@ -28,7 +28,7 @@ export function repairConditions(filter: RepairFilter, options: { searchesCustom
     from ? sql`r.work_on >= ${from}` : undefined,
     to ? sql`r.work_on <= ${to}` : undefined,
     filter.cameBack === 'yes' ? cameBack : undefined,
-    filter.cameBack === 'no' ? sql`NOT ${cameBack}` : undefined,
+    filter.cameBack === 'no' ? sql`NOT (${cameBack})` : undefined,
   ]);
 }
 

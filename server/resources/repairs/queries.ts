@@ -53,17 +53,18 @@ export function findRepairs(
     sql`WITH page AS MATERIALIZED (
       SELECT r.shop_id, r.id FROM repairs r WHERE ${conditions} ${after}
       ORDER BY r.work_on DESC, r.id DESC LIMIT ${page.rows}
-    ), came_back AS (
-      SELECT e.first_id, min(${daysOfReturn}) AS days FROM ${effectiveComebacks} e
-      JOIN page p ON p.id = e.first_id
-      JOIN repairs f ON f.shop_id = p.shop_id AND f.id = e.first_id
-      JOIN repairs s ON s.shop_id = p.shop_id AND s.id = e.return_id
-      WHERE e.is_counted GROUP BY e.first_id
-    ), comes_from AS (
-      SELECT e.return_id, f.id, f.number FROM ${effectiveComebacks} e
-      JOIN page p ON p.id = e.return_id
-      JOIN repairs f ON f.shop_id = p.shop_id AND f.id = e.first_id
+    ), returns AS MATERIALIZED (
+      SELECT e.return_id, e.first_id, e.days FROM ${effectiveComebacks} e
       WHERE e.is_counted
+        AND (e.first_id IN (SELECT id FROM page) OR e.return_id IN (SELECT id FROM page))
+    ), came_back AS (
+      SELECT e.first_id, min(${daysOfReturn}) AS days FROM returns e
+      JOIN repairs f ON f.shop_id = current_shop_id() AND f.id = e.first_id
+      JOIN repairs s ON s.shop_id = current_shop_id() AND s.id = e.return_id
+      GROUP BY e.first_id
+    ), comes_from AS (
+      SELECT e.return_id, f.id, f.number FROM returns e
+      JOIN repairs f ON f.shop_id = current_shop_id() AND f.id = e.first_id
     )
     SELECT r.id, r.number, l.name AS location, r.ticket_type AS "ticketType", r.work_on AS "workOn",
       r.closed_on AS "closedOn", ${named('u', unitName)} AS unit, ${named('m', modelName)} AS model,
