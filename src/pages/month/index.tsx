@@ -63,7 +63,7 @@ export function Component() {
         <>
           {/* On a phone what needs doing comes before the picture; at the desk it stands beside it. */}
           <div className="grid items-start gap-6 desk:grid-cols-[minmax(0,1fr)_292px] desk:grid-rows-[auto_1fr]">
-            <div className="min-w-0 desk:col-start-2 desk:row-start-1">
+            <div className="min-w-0 desk:col-start-2 desk:row-start-1 print:order-last">
               <NeedsDoing todos={review.todos} />
             </div>
             <div className="min-w-0 desk:col-start-1 desk:row-span-2 desk:row-start-1">
