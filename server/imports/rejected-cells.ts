@@ -1,8 +1,8 @@
 import { REPORT_HEADERS } from './columns';
 
-const FORMULA = /^'?[=+\-@\t\r]/;
+const FORMULA = /^'*[=+\-@\t\r]/;
 const PLAIN_NUMBER = /^[+-]?[\d.,\s]*$/;
-const GUARDED = /^''?[=+\-@\t\r]/;
+const GUARDED = /^'+[=+\-@\t\r]/;
 
 /** A text that a spreadsheet would take for a formula gets an apostrophe before it; numbers stay numbers. */
 export const guardCell = (cell: string): string =>

@@ -101,6 +101,12 @@ async function byTag(client: pg.PoolClient): Promise<void> {
 async function describeUnits(client: pg.PoolClient): Promise<void> {
   const latest = (name: string, condition: string) =>
     `(array_agg(${name} ORDER BY t.closed_on DESC, t.ordinal DESC) FILTER (WHERE ${condition}))[1] AS ${name}`;
+  await client.query('ANALYZE targets (unit_id)');
+  await client.query(`
+    CREATE TEMP TABLE last_seen ON COMMIT DROP AS
+    SELECT r.unit_id, max(r.closed_on) AS last_on FROM repairs r
+    WHERE r.shop_id = ${SHOP} AND r.unit_id IN (SELECT DISTINCT unit_id FROM targets WHERE unit_id IS NOT NULL) GROUP BY 1`);
+  await client.query('ANALYZE last_seen');
   const isNews = '(k.last_on IS NULL OR t.closed_on >= k.last_on)';
   await client.query(
     updateNoted(
@@ -113,10 +119,7 @@ async function describeUnits(client: pg.PoolClient): Promise<void> {
            ${latest('customer_id', `t.customer_id IS NOT NULL AND ${isNews}`)},
            ${latest('in_service_on', 't.in_service_on IS NOT NULL')}, ${latest('use_class', 't.use_class IS NOT NULL')},
            ${latest('unit_ref', `t.unit_ref IS NOT NULL AND ${isNews}`)}, ${latest('machine_ref', `t.unit_ref IS NOT NULL AND ${isNews}`)}
-         FROM targets t LEFT JOIN (
-           SELECT r.unit_id, max(r.closed_on) AS last_on FROM repairs r
-           WHERE r.shop_id = ${SHOP} AND r.unit_id IN (SELECT unit_id FROM targets) GROUP BY 1
-         ) k ON k.unit_id = t.unit_id
+         FROM targets t LEFT JOIN last_seen k ON k.unit_id = t.unit_id
          WHERE t.unit_id IS NOT NULL GROUP BY 1
        ) w ON w.unit_id = u.id
        WHERE u.shop_id = ${SHOP} AND (
