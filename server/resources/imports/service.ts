@@ -19,7 +19,7 @@ import { parseInput } from '../../http/problem';
 import { createImport } from '../../imports/create-import';
 import { presentImport, readImport } from '../../imports/import-state';
 import { previewFile } from '../../imports/preview-file';
-import { findSpooled, removeSpooled, spoolUpload, type Spooled } from '../../imports/spool';
+import { findSpooled, removeSpooled, spoolUpload, sweepSpools, type Spooled } from '../../imports/spool';
 import { hasImport, listImportRows, listRejectionRows } from './queries';
 
 export type Upload = { path: string; originalname: string; size: number };
@@ -57,6 +57,7 @@ export async function previewUpload(
   upload: Upload,
   kind: string,
 ): Promise<FilePreview> {
+  await sweepSpools(deps.config.dataDir, deps.now());
   const spooled = await spoolUpload(deps.config.dataDir, shopId, upload);
   return keptIfDone(spooled, () => previewFile(deps, shopId, requireKind(kind), spooled));
 }
