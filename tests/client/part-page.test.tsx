@@ -30,7 +30,9 @@ test('a part that wears out says by when, with limits, and what the newer number
       },
     }),
   );
-  expect(said).toMatch(/^It wears out: one in ten is gone by \d+ h \(\d+–\d+\), half by \d+ h \(\d+–\d+\)/);
+  expect(said).toMatch(
+    /^All part numbers together: it wears out: one in ten is gone by \d+ h \(\d+–\d+\), half by \d+ h \(\d+–\d+\)/,
+  );
   expect(said).toContain('38-2290, fails less than half as often at the same age (0.27–0.71 times)');
 });
 
@@ -148,4 +150,16 @@ test('the same figures stand in a table', async () => {
   if (asTable) fireEvent.click(asTable);
   const table = screen.getByRole('table', { name: 'Share still running, by hours since fitted' });
   expect(within(table).getAllByRole('row')).toHaveLength(life.kaplanMeier.length + 1);
+});
+
+test('whoever may not read figures is shown the repairs instead', async () => {
+  const { asked, router } = await renderPage(
+    PATH,
+    { 'GET /repairs': list([]), 'GET /models': list([]) },
+    { role: 'counter' },
+  );
+  expect(`${router.state.location.pathname}${router.state.location.search}`).toBe(
+    `/repairs?componentId=${CLUTCH.id}`,
+  );
+  expect(asked.map(({ path }) => path)).not.toContain('/part-life');
 });

@@ -46,7 +46,7 @@ export function ChartFrame(props: Props) {
           </figure>
         )}
       </PanelBoundary>
-      <div className="mt-1 -mb-2 flex flex-wrap items-center gap-x-4" data-screen-only>
+      <div className="mt-1 -mb-2 flex flex-wrap items-center gap-x-4 gap-y-1.5" data-screen-only>
         <AsTable isTable={isTable} onToggle={() => setTable(!isTable)} />
         {foot}
         <HowComputed anchor={how} />

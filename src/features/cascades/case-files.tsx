@@ -33,8 +33,11 @@ export function CaseFiles({ caseFiles, formats }: Props) {
             <span className="font-label">
               {first.name} and {lowered(second.name)}
             </span>
-            , <Link to={paths.model(model.id)}>{model.name}</Link>: {formats.count(times)}{' '}
-            {times === 1 ? 'time' : 'times'} here; not proof.
+            ,{' '}
+            <Link to={paths.model(model.id)} className="underline">
+              {model.name}
+            </Link>
+            : {formats.count(times)} {times === 1 ? 'time' : 'times'} here; not proof.
             <span className="flex flex-wrap gap-x-3 text-sm text-dim">
               {repairs.slice(0, MOST_REPAIRS).map((repair) => (
                 <Link

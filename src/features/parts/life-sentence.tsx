@@ -13,15 +13,17 @@ type Props = {
   ages: Ages;
   reasons: 'known' | 'allFailed' | 'noneFailed';
   isAssumed: boolean;
+  /** One part number alone is looked at. */
+  isOneNumber: boolean;
   /** The same page with the original parts taken in. */
   assumeLink: string;
 };
 
 /** How long it lasts, in one sentence, whatever the records can say. */
 export function LifeSentence(props: Props) {
-  const { life, formats, ages, reasons } = props;
+  const { life, formats, ages } = props;
   if (life.lives === 0) return <NothingFollowed {...props} />;
-  const start = <Start life={life} reasons={reasons} />;
+  const start = <Start {...props} />;
   if (life.failures === 0) return <NoneFailed {...props} />;
   const counts = `${formats.count(life.failures)} of ${formats.count(life.lives)}`;
   if (life.pattern === 'too_few') {
@@ -40,7 +42,7 @@ export function LifeSentence(props: Props) {
     );
   }
   const isRough = life.failures < FEW_FAILURES;
-  const hasStart = startWords(life, reasons) !== '';
+  const hasStart = startWords(props) !== '';
   const opening = (word: string) => (hasStart ? word : capital(word));
   return (
     <Finding>
@@ -58,14 +60,17 @@ export function LifeSentence(props: Props) {
 }
 
 /** Whatever the figure holds under, before it. */
-function Start({ life, reasons }: Pick<Props, 'life' | 'reasons'>) {
-  const text = startWords(life, reasons);
+type StartProps = Pick<Props, 'life' | 'reasons' | 'isOneNumber'>;
+
+function Start(props: StartProps) {
+  const text = startWords(props);
   return text === '' ? null : <>{`${capital(text)}: `}</>;
 }
 
-function startWords(life: PartLife, reasons: Props['reasons']): string {
+function startWords({ life, reasons, isOneNumber }: StartProps): string {
   return [
     scopeWords(life),
+    life.comparison && !isOneNumber ? 'all part numbers together' : '',
     life.amongThoseThatCameIn ? 'among machines that came in' : '',
     reasons === 'allFailed' ? 'if every replacement without a reason was a failure' : '',
     reasons === 'noneFailed' ? 'if no replacement without a reason was a failure' : '',
@@ -101,11 +106,12 @@ function NothingFollowed({ life, formats, isAssumed, assumeLink }: Props) {
 }
 
 /** No failure gives no estimate: only how far it has been seen to hold. */
-function NoneFailed({ life, formats, ages, reasons, isAssumed }: Props) {
+function NoneFailed(props: Props) {
+  const { life, formats, ages, isAssumed } = props;
   const half = isAssumed ? null : reachedWithoutFailure(life.atRiskAt, 0.5);
   return (
     <Finding>
-      <Start life={life} reasons={reasons} />
+      <Start {...props} />
       <Strong>None of {formats.count(life.lives)}</Strong> failed
       {half ? (
         <>

@@ -40,7 +40,10 @@ function Group({ taken, formats }: { taken: readonly Taken[]; formats: Formats }
   if (taken.length === 1) {
     return (
       <li>
-        <Link to={paths.cascade(first.findingId)}>{first.component.name}</Link> {counts}
+        <Link to={paths.cascade(first.findingId)} className="underline">
+          {first.component.name}
+        </Link>{' '}
+        {counts}
         {first.model && <span className="block text-xs text-dim">on the {first.model.name}</span>}
       </li>
     );

@@ -1,5 +1,5 @@
 import { useSuspenseQueries, useSuspenseQuery } from '@tanstack/react-query';
-import { Link, useParams, useSearchParams, type LoaderFunctionArgs } from 'react-router';
+import { Link, redirect, useParams, useSearchParams, type LoaderFunctionArgs } from 'react-router';
 import { Button } from '../../components/ui/button';
 import { Caution } from '../../components/ui/caution';
 import { RouteError } from '../../components/ui/error-panel';
@@ -19,7 +19,7 @@ import { TakesWithIt } from '../../features/parts/takes-with-it';
 import type { PartLife } from '../../../shared/parts';
 import { agesOn } from '../../lib/ages';
 import { queryClient } from '../../lib/query-client';
-import { useFormats } from '../../lib/session';
+import { can, sessionQuery, useFormats } from '../../lib/session';
 import { paths } from '../../paths';
 
 export const ErrorBoundary = RouteError;
@@ -44,6 +44,9 @@ const numberQuery = (component: string, address: LifeAddress, life: PartLife, pa
 export async function loader({ params, request }: LoaderFunctionArgs) {
   const component = params['component'] ?? '';
   const address = readAddress(new URL(request.url).searchParams);
+  const { shop } = await queryClient.query({ ...sessionQuery, staleTime: 'static' });
+  // The counter reads records, not figures.
+  if (!can(shop.role, 'analysis')) throw redirect(paths.repairs({ componentId: component }));
   const pickers = [modelsQuery(), familiesQuery] as const;
   const [life] = await Promise.all([
     queryClient.query({ ...partLifeQuery(component, filtersOf(address)), staleTime: 'static' }),
@@ -111,6 +114,7 @@ export function Component() {
           formats={formats}
           ages={ages}
           reasons={address.reasons ?? 'known'}
+          isOneNumber={address.partNumbers !== undefined}
           isAssumed={address.assumedOriginal === 'true'}
           assumeLink={linkTo({ original: 'true' })}
         />
@@ -127,7 +131,7 @@ export function Component() {
               foot={
                 <Link
                   to={paths.repairs({ componentId: life.component.id, modelId: address.modelId })}
-                  className="text-sm"
+                  className="inline-flex min-h-11 items-center text-sm desk:min-h-9"
                 >
                   the repairs behind it
                 </Link>
