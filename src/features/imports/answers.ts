@@ -10,11 +10,14 @@ export type Answers = {
 };
 
 export function firstAnswers(preview: FilePreview): Answers {
-  return {
+  const answers: Answers = {
     columns: preview.proposals.map(({ column }, at) => (isReadable(preview, at) ? column : null)),
     dateFormat: preview.dateFormat,
     decimal: preview.decimal,
   };
+  const question = dateQuestion(preview, answers);
+  const [only, another] = question?.options ?? [];
+  return only && !another ? { ...answers, dateFormat: only } : answers;
 }
 
 /** A column is named to the server by its header, so one without, or with another's, cannot be read. */
@@ -68,15 +71,12 @@ export function dateQuestion(preview: FilePreview, answers: Answers): DateQuesti
   const places = answers.columns.flatMap((column, at) => (column?.endsWith('_on') ? [at] : []));
   const samples = [...new Set(places.flatMap((at) => preview.proposals[at]?.samples ?? []))];
   if (samples.length === 0) return null;
-  if (preview.dateFormat === null)
-    return { samples, options: formatsFor(samples), reason: preview.dateFormatReason };
-  if (areWritten(samples, preview.dateFormat)) return null;
-  const other = samples.find((sample) => !areWritten([sample], preview.dateFormat ?? 'yyyy-MM-dd'));
-  return {
-    samples,
-    options: formatsFor(samples),
-    reason: `“${other ?? ''}” is not written like the other dates.`,
-  };
+  if (preview.dateFormat !== null && areWritten(samples, preview.dateFormat)) return null;
+  const options = formatsFor(samples);
+  const usual = preview.dateFormat ?? (options.length === 1 ? options[0] : undefined);
+  const odd = usual && samples.find((sample) => !areWritten([sample], usual));
+  const reason = odd ? `“${odd}” is not written like the other dates.` : preview.dateFormatReason;
+  return { samples, options, reason };
 }
 
 /** What is odd about the file itself and cannot be answered here; the questions stand by themselves. */

@@ -30,10 +30,12 @@ const FORMATS = Object.keys(DATE_SHAPES) as DateFormat[];
 
 export const isDateFormat = (value: string): value is DateFormat => value in DATE_SHAPES;
 
-/** The ways in which all of these could be written; every way where that is none. */
+/** The ways in which most of these are written, so that one slip does not hide it; every way where they fit none. */
 export function formatsFor(samples: readonly string[]): DateFormat[] {
-  const fitting = FORMATS.filter((format) => areWritten(samples, format));
-  return fitting.length > 0 && samples.length > 0 ? fitting : FORMATS;
+  const fitting = (format: DateFormat) =>
+    samples.filter((sample) => DATE_SHAPES[format].pattern.test(sample.trim())).length;
+  const most = Math.max(...FORMATS.map(fitting));
+  return most === 0 ? FORMATS : FORMATS.filter((format) => fitting(format) === most);
 }
 
 /** The server reads year-month-day beside whatever is said, since it can mean nothing else. */

@@ -14,7 +14,7 @@ export function RepairFilterBar({ filters, models, onChange }: Props) {
     <div className="mb-4 flex flex-wrap items-center gap-x-5 gap-y-2" data-screen-only>
       <SearchBox
         key={filters.q ?? ''}
-        label="Number, serial, name or words"
+        label="Number, name, words"
         value={filters.q ?? ''}
         onSearch={(q) => onChange({ q })}
       />

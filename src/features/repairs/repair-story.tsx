@@ -66,8 +66,13 @@ function Day({ on, formats }: { on: string; formats: Formats }) {
   );
 }
 
-/** The record's own words, untouched. */
-const said = (text: string): ReactNode => <q className="whitespace-pre-line">{text.trim()}</q>;
+/** The record's own words, untouched; a full stop follows where they have none. */
+const said = (text: string): ReactNode => (
+  <>
+    <q className="whitespace-pre-line">{text.trim()}</q>
+    {/[.!?…]$/.test(text.trim()) ? '' : '.'}
+  </>
+);
 
 function Machine({ repair, isFirst = false }: { repair: RepairWhole; isFirst?: boolean }) {
   const { unit, model, machineText } = repair;

@@ -1,7 +1,7 @@
 import type { RepairListed } from '../../../shared/repairs';
 import { Finding, Over, Strong } from '../../components/ui/finding';
 import type { Formats } from '../../lib/format';
-import { hasFilters, type RepairFilters } from './repair-filters';
+import type { RepairFilters } from './repair-filters';
 
 type Props = {
   rows: readonly RepairListed[];
@@ -15,7 +15,14 @@ export function RepairsSentence({ rows, hasMore, filters, formats }: Props) {
   const [newest] = rows;
   const oldest = rows.at(-1);
   if (!newest || !oldest) return null;
-  const about = filters.q ? ` with “${filters.q}”` : hasFilters(filters) ? ' chosen here' : '';
+  const about = [
+    filters.q ? ` with “${filters.q}”` : '',
+    filters.cameBack === 'yes'
+      ? ' that came back'
+      : filters.cameBack === 'no'
+        ? ' that did not come back'
+        : '',
+  ].join('');
   const back = rows.filter(({ cameBackAfterDays }) => cameBackAfterDays !== null).length;
   return (
     <Finding>

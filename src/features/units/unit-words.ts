@@ -21,7 +21,8 @@ export function shortWorkOf(event: UnitEvent): string {
   ];
   const [first] = names;
   if (first) return names.length > 1 ? `${first} +${names.length - 1}` : first;
-  return workOf(event).slice(0, 24);
+  const [work] = event.workDone;
+  return work ? [work.component?.name, workWords(work.workDone)].filter(Boolean).join(' ') : '';
 }
 
 export function titleOf({ kind, repair }: UnitEvent): string {

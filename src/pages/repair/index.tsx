@@ -54,22 +54,24 @@ export function Component() {
         <div className="flex min-w-0 flex-col gap-6">
           <RepairStory repair={repair} formats={formats} />
           {isNearDanger(repair) && <Caution />}
+          <Sheet title="Lines" sub="under each: where it is known from">
+            <DataTable
+              caption={`Lines of repair ${repair.number}`}
+              rows={repair.lines}
+              columns={columns}
+              rowId={(line) => line.id}
+              spreadsheet={`repair-${repair.number}`}
+              empty={
+                <p className="text-dim">The record has no lines: no part, no labor, no work is listed.</p>
+              }
+            />
+          </Sheet>
         </div>
         <div className="flex min-w-0 flex-col gap-6">
           <RepairLinks repair={repair} formats={formats} />
           <RepairFacts repair={repair} formats={formats} />
         </div>
       </div>
-      <Sheet title="Lines" sub="under each: where it is known from">
-        <DataTable
-          caption={`Lines of repair ${repair.number}`}
-          rows={repair.lines}
-          columns={columns}
-          rowId={(line) => line.id}
-          spreadsheet={`repair-${repair.number}`}
-          empty={<p className="text-dim">The record has no lines: no part, no labor, no work is listed.</p>}
-        />
-      </Sheet>
     </Page>
   );
 }
