@@ -59,7 +59,8 @@ export function stillNeeded(preview: FilePreview, kind: ImportKind, answers: Ans
     .map(({ label, about }) => `Which column is “${label}”? ${about}.`);
   if (kind === 'units' && !has('unit_serial') && !has('unit_ref'))
     lacking.push('Which column is the machine’s serial number, or your own tag?');
-  if (dateQuestion(preview, answers) && answers.dateFormat === null)
+  const dates = dateQuestion(preview, answers);
+  if (dates && !dates.options.some((option) => option === answers.dateFormat))
     lacking.push('How are the dates written?');
   return lacking;
 }
