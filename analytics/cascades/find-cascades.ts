@@ -183,7 +183,8 @@ export function findCascades(visits: readonly CascadeVisit[], options: CascadeOp
     windowDays,
     familyOf: (at) => familyAt(at) ?? '',
     isDeclared,
-    names,
+    declaredPairs: { names: names.declared, entries: pairCounts.declaredPairs },
+    searchedPairs: { names: names.searched, entries: pairCounts.searchedPairs },
   });
   const selected = selectFindings(pooled, pairCounts.declaredPairs, maxFalseDiscovery);
   const findings = selected.flatMap((one) => {

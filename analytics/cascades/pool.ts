@@ -2,7 +2,7 @@ import type { PairEvidence } from './evidence';
 import { pairLikelihood } from './evidence';
 import type { Examined, ExaminedPair } from './examine';
 import { repeatByChance, sharedInflation, soonByChance, unlinkedEvidence } from './examine';
-import type { PairPosterior } from './mixture';
+import type { PairPosterior, Unlinked } from './mixture';
 import { poolPairs } from './mixture';
 
 /** One model's pair after all models have been heard. */
@@ -79,7 +79,7 @@ const ROUNDS = 2;
 const USUAL_INFLATION = 1.25;
 
 /** Judges one list of pairs (declared or searched) by itself: the two share the inflation, not the prior. */
-const judge = (named: readonly Named[], unlinked: number, inflation: number) => {
+const judge = (named: readonly Named[], unlinked: Unlinked, inflation: number) => {
   const likelihoods = named.map(({ groups }) => ({
     groups: groups.map((group) => group.map(({ evidence }) => pairLikelihood(inflated(evidence, inflation)))),
   }));
@@ -92,24 +92,27 @@ export type PoolInput = {
   windowDays: number;
   familyOf: (model: number) => string;
   isDeclared: (a: number, b: number) => boolean;
-  /** Pairs of names examined in any model, near each other or not. */
-  names: { declared: number; searched: number };
+  /** Pairs of names examined in any model, and pairs of single models, near each other or not. */
+  declaredPairs: Unlinked;
+  searchedPairs: Unlinked;
 };
 
 export const poolModels = (input: PoolInput): { declared: JudgedName[]; searched: JudgedName[] } => {
-  const { examined, components, windowDays, familyOf, isDeclared, names } = input;
+  const { examined, components, windowDays, familyOf, isDeclared, declaredPairs, searchedPairs } = input;
   const named = namePairs(examined, components, windowDays, familyOf).map((one) =>
     withChanceCourse(one, examined, windowDays),
   );
   const lists = [
-    { pairs: named.filter(({ a, b }) => isDeclared(a, b)), examined: names.declared },
-    { pairs: named.filter(({ a, b }) => !isDeclared(a, b)), examined: names.searched },
+    { pairs: named.filter(({ a, b }) => isDeclared(a, b)), examined: declaredPairs },
+    { pairs: named.filter(({ a, b }) => !isDeclared(a, b)), examined: searchedPairs },
   ];
   let inflation = USUAL_INFLATION;
   let judged: JudgedName[][] = [];
   for (let round = 0; round < ROUNDS; round += 1) {
     judged = lists.map(({ pairs, examined: all }) => {
-      const posteriors = judge(pairs, all - pairs.length, inflation);
+      const entries = pairs.reduce((sum, { groups }) => sum + groups.flat().length, 0);
+      const unlinked = { names: all.names - pairs.length, entries: all.entries - entries };
+      const posteriors = judge(pairs, unlinked, inflation);
       return pairs.map(({ a, b, groups }, pairAt): JudgedName => {
         const byModel = new Map<number, JudgedPair>();
         groups.forEach((group, groupAt) => {

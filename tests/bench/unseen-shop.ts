@@ -23,12 +23,28 @@ const NAMES = [
 const SERVICE = ['Air filter', 'Oil filter', 'Spark plug', 'Mower blade'];
 const SEASON_DAYS = 215;
 
-export function unseenShop(options: {
-  seed: number;
-  models: number;
-  unitsPerModel: number;
-  years: number;
-}): UnseenShop {
+/** How its causes behave and its technicians work; each may be turned, and none changes what the others draw. */
+export type UnseenHabits = {
+  /** Mean days until a machine whose cause was left in is back. */
+  returnDays?: number;
+  /** The weakest link takes the resultant part with it so often. */
+  weakestLink?: number;
+  /** Share of later visits with the cure that replace the resultant part as well. */
+  cureWithResultant?: number;
+  /** Share of broken resultant parts coded as damage beside their cause. */
+  codedDamage?: number;
+};
+
+export function unseenShop(
+  options: {
+    seed: number;
+    models: number;
+    unitsPerModel: number;
+    years: number;
+  } & UnseenHabits,
+): UnseenShop {
+  const { returnDays = 14, weakestLink = 0.5, cureWithResultant = 1, codedDamage = 0.5 } = options;
+  const habits = { returnDays, weakestLink, cureWithResultant, codedDamage };
   const random = generator(options.seed);
   const visits: Visit[] = [];
   const planted: UnseenShop['planted'] = [];
@@ -44,7 +60,10 @@ export function unseenShop(options: {
       scale: 350 + 900 * random(),
       kind: 'wear',
     }));
-    const links = plantLinks(random, components).map((link) => ({ ...link, holds: 0.5 + 0.5 * random() }));
+    const links = plantLinks(random, components).map((link) => ({
+      ...link,
+      holds: weakestLink + (1 - weakestLink) * random(),
+    }));
     for (const { causal, resultant } of links) planted.push({ model, causal, resultant });
     const foundAtOnce = 0.25 + 0.5 * random();
     for (let u = 0; u < options.unitsPerModel; u++, unit++) {
@@ -53,7 +72,17 @@ export function unseenShop(options: {
         ? firstDay - Math.floor(random() * 1500)
         : firstDay + Math.floor(random() * (options.years - 1) * 365);
       inService.set(unit, start);
-      const story = tellUnit({ random, unit, model, components, links, start, lastDay, foundAtOnce });
+      const story = tellUnit({
+        random,
+        unit,
+        model,
+        components,
+        links,
+        start,
+        lastDay,
+        foundAtOnce,
+        habits,
+      });
       visits.push(...story.filter(({ day }) => day >= firstDay && day <= lastDay));
     }
   }
@@ -81,15 +110,20 @@ function tellUnit(world: {
   start: number;
   lastDay: number;
   foundAtOnce: number;
+  habits: Required<UnseenHabits>;
 }): Visit[] {
-  const { random, unit, model, components, links, start, lastDay, foundAtOnce } = world;
+  const { random, unit, model, components, links, start, lastDay, foundAtOnce, habits } = world;
   const hoursADay = ((random() < 0.15 ? 350 : 60) * Math.exp(0.4 * normal(random))) / SEASON_DAYS;
   const frailty = gammaOfShape4(random);
   const visits: Visit[] = [];
+  const known = new Map<number, number>();
   const hoursAt = (day: number) => {
+    const before = known.get(day);
+    if (before !== undefined) return before;
     let hours = 0;
     for (let year = start; year < day; year += 365)
       hours += Math.min(SEASON_DAYS, seasonDays(year, Math.min(day, year + 365))) * hoursADay;
+    known.set(day, hours);
     return hours;
   };
   const dayAt = (hours: number) => {
@@ -144,15 +178,16 @@ function tellUnit(world: {
         'quit again',
         damaged.map((component) => ({ component, reason: 'failed', cents: 2500 })),
       );
-      at += 2 + Math.floor(-Math.log(1 - random()) * 14);
+      at += 2 + Math.floor(-Math.log(1 - random()) * habits.returnDays);
     }
     if (at > lastDay) break;
+    const isLeft = at > day && habits.cureWithResultant < 1 && random() >= habits.cureWithResultant;
     const along = components.filter((one) => one.name !== name && random() < 0.01).map((one) => one.name);
     visit(at, 'quit', [
       { component: name, reason: 'failed', cents: 12_000 },
-      ...damaged.map((component) => ({
+      ...(isLeft ? [] : damaged).map((component) => ({
         component,
-        reason: random() < 0.5 ? 'damage' : 'failed',
+        reason: random() < habits.codedDamage ? 'damage' : 'failed',
         cents: 2500,
       })),
       ...along.map((component) => ({ component, reason: 'preventive', cents: 4000 })),
