@@ -86,7 +86,8 @@ export function comebackColumns({ formats, isOwn, onDecide }: Options): Column<C
       header: isOwn ? 'Looked at' : 'Decided',
       value: statusWords,
       cell: (row) => <Decided row={row} formats={formats} onDecide={onDecide} />,
-      className: 'desk:pl-3 min-w-[9rem]',
+      // On a phone the hand finds it without scrolling the rows.
+      className: `desk:pl-3 desk:min-w-[9rem] ${onDecide ? 'max-desk:sticky max-desk:right-0 max-desk:bg-sheet max-desk:pl-2' : ''}`,
     },
   ];
   return columns.flatMap((column) => (column ? [{ ...column, isSortable: false }] : []));
