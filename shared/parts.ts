@@ -120,6 +120,8 @@ export const partLife = z.strictObject({
   unknown: z.number().int(),
   damaged: z.number().int(),
   withHours: z.number().int(),
+  /** Of the lives, those with an end whose hours lie between the machine's readings before and after it. */
+  betweenReadings: z.number().int(),
   setAside: z.number().int(),
   assumedOriginal: z.number().int(),
   amongThoseThatCameIn: z.boolean(),

@@ -1,4 +1,4 @@
-import { spansOf } from './life-spans';
+import { readingBetween, spansOf } from './life-spans';
 import type { LifeEnd, LifeStart } from './life-spans';
 import type { PartLife } from './part-life';
 import { fitsPart, groupRows } from './record-types';
@@ -70,6 +70,8 @@ export function modelComponents(records: {
  * - A failing part is as old as its machine was on the day it came in; a fitted part starts on the day of the work.
  * - A swapped engine ends (censored) the lives of its components and starts them anew where this shop fitted it.
  *   Swapped elsewhere, they are not followed until this shop fits one.
+ * - A visit without a reading takes its hours from the line between the machine's own readings before and after it;
+ *   a life that rests on one is marked. No rate of other machines is ever used.
  * - Hours over a meter restart whose old reading is not recorded are set aside: censored at the last trusted reading.
  *
  * @param records `modelComponentIds` are the components whose original lives are followed (`modelComponents`)
@@ -83,15 +85,18 @@ export function deriveLivesOfUnit(records: {
   asOfDay: number;
 }): PartLife[] {
   const { unit, components, asOfDay } = records;
-  const { visits, registerReadings } = unitVisits(
+  const { visits: seen, registerReadings } = unitVisits(
     unit,
     records.repairs,
     records.linesOfRepair,
     components,
     asOfDay,
   );
-  const readings = [...visits.flatMap(({ reading }) => reading ?? []), ...registerReadings].sort(
+  const readings = [...seen.flatMap(({ reading }) => reading ?? []), ...registerReadings].sort(
     (a, b) => a.day - b.day || a.track - b.track || a.hours - b.hours,
+  );
+  const visits = seen.map((visit) =>
+    visit.reading ? visit : { ...visit, reading: readingBetween(readings, visit.openingDay) },
   );
   const original = originalStart(unit, visits, readings);
   const running = new Map<string, LifeStart>();

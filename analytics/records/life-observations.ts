@@ -36,6 +36,8 @@ export type LifeCoverage = {
   /** Among those used. */
   deadOnArrival: number;
   cutAtMeterRestart: number;
+  /** With an end whose hours lie between two readings. */
+  between: number;
   competingDamage: number;
   /** Lives used of units that are in the register: without any, a result holds "among machines that came in". */
   inRegister: number;
@@ -69,6 +71,7 @@ export function toCauseObservations(
     leftOut: { assumedOriginal: 0, unknownReason: 0, noClock: 0, noTime: 0 },
     deadOnArrival: 0,
     cutAtMeterRestart: 0,
+    between: 0,
     competingDamage: 0,
     inRegister: 0,
   };
@@ -89,6 +92,7 @@ export function toCauseObservations(
       if (cause === 'damage') coverage.competingDamage++;
       if (life.isDeadOnArrival) coverage.deadOnArrival++;
       if (span.isCut) coverage.cutAtMeterRestart++;
+      if (span.isBetween) coverage.between++;
       if (life.isUnitInRegister) coverage.inRegister++;
     }
   }

@@ -64,7 +64,29 @@ function hoursOf(start: LifeStart, end: LifeEnd, readings: readonly TrustedReadi
   if (!last) return { span: null, missing: isRestarted ? 'meter_restarted' : 'no_reading_at_end' };
   const entry = Math.max(0, entryReading.hours - zero.hours);
   const exit = Math.max(0, last.hours - zero.hours);
-  return { span: { entry: clean(entry), exit: clean(exit), isCut: isRestarted }, missing: null };
+  const span: LifeSpan = { entry: clean(entry), exit: clean(exit), isCut: isRestarted };
+  if (zero.isBetween || last.isBetween) span.isBetween = true;
+  return { span, missing: null };
+}
+
+/** Farther apart than this, two readings say little of the days between them: a winter lies there, or two. */
+const LONGEST_GAP_DAYS = 400;
+
+/**
+ * What the meter will have shown on a day without a reading: on the line between the machine's own readings before
+ * and after it, where both are of one meter and not too far apart; `null` elsewhere, since nothing is extrapolated.
+ * Leaving such failures out instead would make parts look better: a part that runs on keeps its last reading.
+ *
+ * @param readings in order of days
+ */
+export function readingBetween(readings: readonly TrustedReading[], day: number): TrustedReading | null {
+  const before = lastUpTo(readings, day);
+  if (!before) return null;
+  const after = readings[readings.indexOf(before) + 1];
+  if (after?.track !== before.track || after.day - before.day > LONGEST_GAP_DAYS) return null;
+  const share = (day - before.day) / Math.max(1, after.day - before.day);
+  const hours = clean(before.hours + share * (after.hours - before.hours));
+  return { day, track: before.track, hours, isBetween: true };
 }
 
 /** The latest reading up to a day, on any track or on the given one; `readings` are in order of days. */

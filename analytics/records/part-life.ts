@@ -6,6 +6,8 @@ export type LifeSpan = {
   exit: number;
   /** The meter restarted within the life: it is known running up to `exit`, and what came after is set aside. */
   isCut: boolean;
+  /** An end without a reading of its own lies on the line between the machine's readings before and after it. */
+  isBetween?: boolean;
 };
 
 /** Why a life has no hours, or no days. */

@@ -5,7 +5,13 @@ import { byVisit, fitsPart, openingDay, workDay } from './record-types';
 import type { RecordComponent, RecordLine, RecordRepair, RecordUnit } from './record-types';
 
 /** A reading that is trusted, on its track. */
-export type TrustedReading = { day: number; track: number; hours: number };
+export type TrustedReading = {
+  day: number;
+  track: number;
+  hours: number;
+  /** Not read on that day: taken from the line between the machine's own readings before and after it. */
+  isBetween?: boolean;
+};
 
 /** A component replaced at a visit, however many of it and whatever positions: one event. */
 export type Replacement = {

@@ -23,6 +23,7 @@ const lifeRow = z.object({
   exitDays: z.number().nullable(),
   isDeadOnArrival: z.boolean(),
   setAsideReason: z.string().nullable(),
+  isBetween: z.boolean(),
   isUnitInRegister: z.boolean(),
 });
 
@@ -39,6 +40,7 @@ export async function loadLives(
       l.end_repair_id AS "endRepairId", l.end_on AS "endOn", l.outcome, l.entry_hours AS "entryHours",
       l.exit_hours AS "exitHours", l.entry_days AS "entryDays", l.exit_days AS "exitDays",
       l.is_dead_on_arrival AS "isDeadOnArrival", l.set_aside_reason AS "setAsideReason",
+      l.is_between_readings AS "isBetween",
       u.is_registered AS "isUnitInRegister"
     FROM part_lives l JOIN units u ON u.shop_id = l.shop_id AND u.id = l.unit_id
     WHERE ${allOf([
@@ -50,7 +52,8 @@ export async function loadLives(
 }
 
 function lifeOf(row: z.output<typeof lifeRow>): PartLife {
-  const { startOn, endOn, entryHours, exitHours, entryDays, exitDays, setAsideReason, ...life } = row;
+  const { startOn, endOn, entryHours, exitHours, entryDays, exitDays, setAsideReason, isBetween, ...life } =
+    row;
   return {
     ...life,
     engine: 0,
@@ -58,13 +61,13 @@ function lifeOf(row: z.output<typeof lifeRow>): PartLife {
     startDay: startOn === null ? null : dayNumber(startOn),
     endDay: dayNumber(endOn),
     endReason: null,
-    hours: spanOf(entryHours, exitHours, setAsideReason === 'meter_restarted'),
+    hours: spanOf(entryHours, exitHours, setAsideReason === 'meter_restarted', isBetween),
     hoursMissing: null,
     days: spanOf(entryDays, exitDays, false),
     daysMissing: null,
   };
 }
 
-function spanOf(entry: number | null, exit: number | null, isCut: boolean) {
-  return exit === null ? null : { entry: entry ?? 0, exit, isCut };
+function spanOf(entry: number | null, exit: number | null, isCut: boolean, isBetween = false) {
+  return exit === null ? null : { entry: entry ?? 0, exit, isCut, isBetween };
 }

@@ -34,6 +34,7 @@ export function partLife(
     unknown: 0,
     damaged: 0,
     withHours: rows.length,
+    betweenReadings: 0,
     setAside: 0,
     assumedOriginal: 0,
     amongThoseThatCameIn: false,

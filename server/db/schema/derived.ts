@@ -88,6 +88,8 @@ export const partLives = pgTable(
     exitDays: doublePrecision('exit_days'),
     isDeadOnArrival: boolean('is_dead_on_arrival').notNull().default(false),
     setAsideReason: text('set_aside_reason'),
+    /** An end of it was not read: its hours lie between the machine's readings before and after. */
+    isBetweenReadings: boolean('is_between_readings').notNull().default(false),
   },
   (t) => [
     primaryKey({ columns: [t.shopId, t.id] }),

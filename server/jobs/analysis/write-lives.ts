@@ -13,13 +13,15 @@ export async function writeLives(tx: Transaction, lives: readonly PartLife[]): P
     const rows = JSON.stringify(lives.slice(from, from + ROWS_AT_ONCE).map(toRow));
     await tx.execute(sql`
       INSERT INTO part_lives (shop_id, unit_id, model_id, component_id, part_id, origin, start_repair_id, end_repair_id,
-        start_on, end_on, outcome, entry_hours, exit_hours, entry_days, exit_days, is_dead_on_arrival, set_aside_reason)
+        start_on, end_on, outcome, entry_hours, exit_hours, entry_days, exit_days, is_dead_on_arrival, set_aside_reason,
+        is_between_readings)
       SELECT current_shop_id(), unit_id, model_id, component_id, part_id, origin, start_repair_id, end_repair_id,
-        start_on, end_on, outcome, entry_hours, exit_hours, entry_days, exit_days, is_dead_on_arrival, set_aside_reason
+        start_on, end_on, outcome, entry_hours, exit_hours, entry_days, exit_days, is_dead_on_arrival, set_aside_reason,
+        is_between_readings
       FROM json_to_recordset(${rows}::json) AS life(unit_id uuid, model_id uuid, component_id uuid, part_id uuid,
         origin text, start_repair_id uuid, end_repair_id uuid, start_on date, end_on date, outcome text,
         entry_hours float8, exit_hours float8, entry_days float8, exit_days float8, is_dead_on_arrival boolean,
-        set_aside_reason text)`);
+        set_aside_reason text, is_between_readings boolean)`);
   }
 }
 
@@ -40,6 +42,7 @@ function toRow(life: PartLife) {
     entry_days: life.days?.entry ?? null,
     exit_days: life.days?.exit ?? null,
     is_dead_on_arrival: life.isDeadOnArrival,
+    is_between_readings: life.hours?.isBetween === true,
     set_aside_reason: life.hours?.isCut ? 'meter_restarted' : life.hoursMissing,
   };
 }

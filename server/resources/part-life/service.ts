@@ -82,6 +82,7 @@ function figuresOf(
     unknown: seen.filter(({ outcome }) => outcome === 'unknown').length,
     damaged: coverage.competingDamage,
     withHours: seen.filter(({ hours }) => hours !== null).length,
+    betweenReadings: coverage.between,
     setAside: leftOut.noClock + leftOut.noTime,
     assumedOriginal: lives.filter(({ origin }) => origin === 'assumed_original').length,
     // Where most were seen only because they broke, the sample is of broken machines.

@@ -72,7 +72,7 @@ export const lifeArticles: readonly HelpArticle[] = [
     anchor: 'clocks',
     title: 'Hours or months',
     body: [
-      'A bearing ages in running hours, a battery in months. Hours are used where at least four in five lives have them; else the calendar. Missing hours are never filled in with an average: heavy users fail first, and their average would make every part look better than it is.',
+      'A bearing ages in running hours, a battery in months. Hours are used where at least four in five lives have them; else the calendar. Missing hours are never filled in with an average: heavy users fail first, and their average would make every part look better than it is. Where a visit has no reading, the hours are taken from the line between that same machine’s readings before and after, and it is said for how many; where there is none after, the life is left out.',
     ],
     sources: [
       'Lawless, Hu & Cao (1995), Methods for the estimation of failure distributions and rates from automobile warranty data, Lifetime Data Analysis 1:227–240',

@@ -23,7 +23,17 @@ const REASONS = [
 
 /** What the figures rest on; what could be counted otherwise is changed where it is said. */
 export function Basis({ life, address, choose, formats }: Props) {
-  const { lives, failures, withHours, unknown, damaged, setAside, assumedOriginal, numbers } = life;
+  const {
+    lives,
+    failures,
+    withHours,
+    unknown,
+    damaged,
+    setAside,
+    betweenReadings,
+    assumedOriginal,
+    numbers,
+  } = life;
   const seen = lives + (address.reasons === undefined ? unknown : 0) + setAside;
   return (
     <Sheet title="What it rests on">
@@ -36,6 +46,13 @@ export function Basis({ life, address, choose, formats }: Props) {
         <Line label="Hours" how="clocks">
           {formats.count(withHours)} of {formats.count(seen)} have hours
           {life.clockReason === 'few_hours' && '; too few, so that months are used'}.
+          {betweenReadings > 0 && (
+            <>
+              {' '}
+              For {formats.count(betweenReadings)} the hours of one end were not read and lie between the
+              machine’s readings before and after.
+            </>
+          )}
           {setAside > 0 && <> {formats.count(setAside)} have no usable age and are left out.</>}
         </Line>
         {(unknown > 0 || address.reasons !== undefined) && (

@@ -223,6 +223,35 @@ describe('the hour meter', () => {
   });
 });
 
+describe('a visit without a reading', () => {
+  const lines = [partLine('b', 'clutch'), partLine('d', 'clutch')];
+  const visits = (last: Parameters<typeof repairRow>[2]) => [
+    repairRow('a', '2024-01-01', { meterHours: 100 }),
+    repairRow('b', '2024-04-10'),
+    repairRow('c', '2024-07-19', { meterHours: 300 }),
+    repairRow('d', '2024-10-27', last),
+  ];
+
+  test('takes its hours from the line between the readings before and after it, and the life says so', () => {
+    const lives = derive(KNOWN, visits({ meterHours: 350 }), lines);
+    expect(lives[0]?.hours).toEqual({ entry: 0, exit: 200, isCut: false, isBetween: true });
+    expect(lives[1]?.hours).toEqual({ entry: 0, exit: 150, isCut: false, isBetween: true });
+  });
+
+  test('has none where no reading comes after it, and a far one does not count', () => {
+    expect(derive(KNOWN, visits({}), lines)[1]).toMatchObject({
+      hours: null,
+      hoursMissing: 'no_reading_at_end',
+    });
+    const far = [
+      repairRow('a', '2023-02-01', { meterHours: 10 }),
+      repairRow('b', '2024-04-10'),
+      ...visits({}).slice(2),
+    ];
+    expect(derive(KNOWN, far, lines)[0]).toMatchObject({ hours: null, hoursMissing: 'no_reading_at_end' });
+  });
+});
+
 describe('an engine swapped for another', () => {
   const repairs = [
     repairRow('a', '2024-01-01', { meterHours: 100, engineSerial: 'E-1' }),

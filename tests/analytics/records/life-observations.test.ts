@@ -59,6 +59,7 @@ describe('lives as observations', () => {
       leftOut: { assumedOriginal: 1, unknownReason: 1, noClock: 1, noTime: 1 },
       deadOnArrival: 0,
       cutAtMeterRestart: 1,
+      between: 0,
       competingDamage: 1,
       inRegister: 3,
     });

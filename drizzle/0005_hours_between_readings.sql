@@ -1,0 +1,1 @@
+ALTER TABLE "part_lives" ADD COLUMN "is_between_readings" boolean DEFAULT false NOT NULL;
