@@ -48,6 +48,19 @@ describe('This month', () => {
     expect(screen.queryByRole('table')).toBeNull();
   });
 
+  it('shows a technician among few a page of its own in place of the shop’s rate', async () => {
+    await renderPage(
+      '/',
+      { 'GET /reports/month': new Problem(403, { title: 'Not allowed', detail: 'See your own.' }) },
+      { role: 'technician' },
+    );
+    expect(screen.getByRole('heading', { level: 1, name: 'This month' })).toBeTruthy();
+    expect(document.title).toBe('This month · Witness Mark');
+    const own = screen.getByRole('link', { name: 'What came back of your own repairs' });
+    expect(own.getAttribute('href')).toBe('/comebacks');
+    expect(screen.queryByRole('alert')).toBeNull();
+  });
+
   it('says what went wrong with its number, and tries again', async () => {
     let tries = 0;
     await renderPage(

@@ -12,6 +12,7 @@ import {
 } from 'recharts';
 import { GRID, MARGIN, shareTicks, X_AXIS, Y_AXIS } from './axes';
 import { ChartBox } from './chart-box';
+import { labelPlaces, type LabelPlace } from './label-places';
 import { TipContent, type Tip } from './tip';
 
 export type FunnelPoint = {
@@ -103,6 +104,12 @@ function FunnelMarks({ points, center, centerText }: MarksProps) {
       .map((at, index) => `${index === 0 ? 'M' : 'L'}${at}`)
       .join('');
   const right = area.x + area.width;
+  const places = labelPlaces(
+    points
+      .filter((point) => standing(point) !== 'within')
+      .map(({ id, name, size, rate }) => ({ id, name, x: x(size), y: y(rate) })),
+    { left: area.x, right, top: area.y, bottom },
+  );
   return (
     <g className="text-xs">
       <path d={edge('limitUpper')} fill="none" stroke="var(--color-dim)" strokeWidth="1.2" />
@@ -132,33 +139,48 @@ function FunnelMarks({ points, center, centerText }: MarksProps) {
           x={x(point.size)}
           y={y(point.rate)}
           isActive={point.id === active}
-          right={right}
+          place={places.get(point.id)}
         />
       ))}
     </g>
   );
 }
 
-type MarkProps = { point: FunnelPoint; x: number; y: number; isActive: boolean; right: number };
+function standing({ rate, limitLower, limitUpper }: FunnelPoint): 'over' | 'under' | 'within' {
+  if (limitUpper !== null && rate > limitUpper) return 'over';
+  return limitLower !== null && rate < limitLower ? 'under' : 'within';
+}
 
-function FunnelMark({ point, x, y, isActive, right }: MarkProps) {
-  const isOver = point.limitUpper !== null && point.rate > point.limitUpper;
-  const isUnder = point.limitLower !== null && point.rate < point.limitLower;
-  const color = isOver ? 'var(--color-oxide)' : isUnder ? 'var(--color-verdigris)' : 'var(--color-layout)';
-  const isLate = x > right - 120;
+const COLORS = {
+  over: 'var(--color-oxide)',
+  under: 'var(--color-verdigris)',
+  within: 'var(--color-layout)',
+} as const;
+
+type MarkProps = {
+  point: FunnelPoint;
+  x: number;
+  y: number;
+  isActive: boolean;
+  place: LabelPlace | undefined;
+};
+
+/** What lies outside of the limits is a diamond with its name. */
+function FunnelMark({ point, x, y, isActive, place }: MarkProps) {
+  const stands = standing(point);
   return (
     <g>
-      {isOver || isUnder ? (
-        <path d={`M${x} ${y - 6}l6 6l-6 6l-6 -6z`} fill={color} />
+      {stands === 'within' ? (
+        <circle cx={x} cy={y} r="3.6" fill={COLORS[stands]} opacity="0.75" />
       ) : (
-        <circle cx={x} cy={y} r="3.6" fill={color} opacity="0.75" />
+        <path d={`M${x} ${y - 6}l6 6l-6 6l-6 -6z`} fill={COLORS[stands]} />
       )}
       {isActive && <circle cx={x} cy={y} r="8" fill="none" stroke="var(--color-layout)" strokeWidth="2" />}
-      {(isOver || isUnder) && (
+      {place && (
         <text
-          x={isLate ? x - 10 : x + 10}
-          y={y + 4}
-          textAnchor={isLate ? 'end' : 'start'}
+          x={place.x}
+          y={place.y + 4}
+          textAnchor={place.anchor}
           fill="var(--color-ink)"
           stroke="var(--color-sheet)"
           strokeWidth="4"

@@ -13,7 +13,7 @@ type Props = {
 export function DayRange({ from, to, onChange, label }: Props) {
   return (
     <fieldset className="flex flex-wrap items-center gap-x-2 gap-y-1">
-      <legend className="float-left mr-2 text-table text-dim">{label}</legend>
+      <legend className="float-left mr-2 text-table text-dim max-sm:w-full">{label}</legend>
       <Day label="from" value={from} onChange={(day) => onChange({ from: day })} />
       <Day label="to" value={to} onChange={(day) => onChange({ to: day })} />
     </fieldset>
@@ -26,7 +26,7 @@ function Day({ label, value, onChange }: DayProps) {
   const id = useId();
   return (
     <span className="inline-flex items-center gap-1.5">
-      <label htmlFor={id} className="text-table text-dim">
+      <label htmlFor={id} className="text-table text-dim max-sm:w-9">
         {label}
       </label>
       <TextInput

@@ -4,19 +4,26 @@ import { isRouteErrorResponse, useRevalidator, useRouteError } from 'react-route
 import { queryClient } from '../../lib/query-client';
 import { ApiError } from '../../lib/api';
 import { Button } from './button';
+import { Page } from './page';
+import { EmptyState } from './states';
 
-type PanelProps = { error: unknown; onRetry?: () => void };
+type PanelProps = {
+  error: unknown;
+  onRetry?: () => void;
+  /** Off where the page's own title says what happened. */
+  isTitled?: boolean;
+};
 
 /** What happened, what to do, the number to tell, and another try. */
-export function ErrorPanel({ error, onRetry }: PanelProps) {
+export function ErrorPanel({ error, onRetry, isTitled = true }: PanelProps) {
   const { title, detail, reference } = describe(error);
   return (
     <div
       role="alert"
       className="max-w-[40rem] rounded-bench border border-rule border-l-4 border-l-oxide bg-sheet p-4"
     >
-      <h2 className="font-heading">{title}</h2>
-      <p className="mt-1 text-dim">{detail}</p>
+      {isTitled && <h2 className="mb-1 font-heading">{title}</h2>}
+      <p className="text-dim">{detail}</p>
       {reference && (
         <p className="mt-1 text-sm text-dim">
           Reference number: <code className="select-all">{reference}</code>
@@ -59,14 +66,28 @@ function describe(error: unknown): { title: string; detail: string; reference: s
 export function RouteError() {
   const error = useRouteError();
   const { revalidate } = useRevalidator();
+  const { title } = describe(error);
+  if (error instanceof ApiError && error.status === 403) {
+    // Trying again would only be refused again.
+    return (
+      <Page title={title}>
+        <EmptyState title="What is yours stands in the list of screens.">
+          The owner of the shop says who may see what.
+        </EmptyState>
+      </Page>
+    );
+  }
   return (
-    <ErrorPanel
-      error={error}
-      onRetry={() => {
-        void queryClient.resetQueries({ predicate: (query) => query.state.status === 'error' });
-        void revalidate();
-      }}
-    />
+    <Page title={title}>
+      <ErrorPanel
+        error={error}
+        isTitled={false}
+        onRetry={() => {
+          void queryClient.resetQueries({ predicate: (query) => query.state.status === 'error' });
+          void revalidate();
+        }}
+      />
+    </Page>
   );
 }
 

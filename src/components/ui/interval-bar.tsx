@@ -35,7 +35,9 @@ export function IntervalBar({ estimate, lower, upper, max, center, text, label, 
         <line x1={x(lower)} x2={x(upper)} y1="10" y2="10" stroke={color} strokeWidth="2" opacity="0.55" />
         <circle cx={x(estimate)} cy="10" r="4" fill={color} />
       </svg>
-      <span aria-hidden="true">{text}</span>
+      <span aria-hidden="true" className="whitespace-nowrap">
+        {text}
+      </span>
     </span>
   );
 }

@@ -1,5 +1,5 @@
 import { useSuspenseQuery } from '@tanstack/react-query';
-import { redirect, useSearchParams, type LoaderFunctionArgs } from 'react-router';
+import { redirect, useRouteError, useSearchParams, type LoaderFunctionArgs } from 'react-router';
 import { RouteError } from '../../components/ui/error-panel';
 import { MonthPicker } from '../../components/ui/month-picker';
 import { Page } from '../../components/ui/page';
@@ -10,6 +10,8 @@ import { MonthPicture } from '../../features/month/month-picture';
 import { MonthSentence } from '../../features/month/month-sentence';
 import { NeedsDoing } from '../../features/month/needs-doing';
 import { monthReviewQuery } from '../../features/month/queries';
+import { TooFewTechnicians } from '../../features/month/too-few-technicians';
+import { ApiError } from '../../lib/api';
 import { queryClient } from '../../lib/query-client';
 import { can, sessionQuery, useCan, useFormats } from '../../lib/session';
 import { paths } from '../../paths';
@@ -25,7 +27,11 @@ export async function loader({ request }: LoaderFunctionArgs) {
   return null;
 }
 
-export const ErrorBoundary = RouteError;
+export function ErrorBoundary() {
+  const error = useRouteError();
+  // Whose role has rates is refused only where the shop's rate would tell a technician another's.
+  return error instanceof ApiError && error.status === 403 ? <TooFewTechnicians /> : <RouteError />;
+}
 
 export function Component() {
   const [search, setSearch] = useSearchParams();
