@@ -41,16 +41,15 @@ export function findComponents(
         count(*) FILTER (WHERE x.reason = 'unknown')::int AS unknown,
         count(DISTINCT r.unit_id)::int AS machines, count(DISTINCT r.model_id)::int AS models,
         coalesce(sum(x.amount_cents), 0)::bigint::float8 AS spent
-      FROM repair_lines x JOIN page p ON p.shop_id = x.shop_id AND p.id = x.component_id
-      JOIN repairs r ON r.shop_id = x.shop_id AND r.id = x.repair_id ${onModel}
-      WHERE x.kind = 'part' AND coalesce(x.quantity, 1) > 0 GROUP BY 1
+      FROM repair_lines x JOIN repairs r ON r.shop_id = x.shop_id AND r.id = x.repair_id ${onModel}
+      WHERE x.component_id IN (SELECT id FROM page) AND x.kind = 'part' AND coalesce(x.quantity, 1) > 0 GROUP BY 1
     ), came_back AS MATERIALIZED (
       SELECT DISTINCT e.first_id FROM ${effectiveComebacks} e WHERE e.is_counted
     ), work AS (
       SELECT component_id, count(*)::int AS size, count(b.first_id)::int AS came_back
       FROM repair_facts f CROSS JOIN LATERAL unnest(f.trouble_component_ids) AS component_id
-      JOIN repairs r ON r.shop_id = f.shop_id AND r.id = f.repair_id ${onModel}
-      LEFT JOIN came_back b ON b.first_id = r.id
+      ${modelId ? sql`JOIN repairs r ON r.shop_id = f.shop_id AND r.id = f.repair_id ${onModel}` : sql.empty()}
+      LEFT JOIN came_back b ON b.first_id = f.repair_id
       WHERE f.left_out IS NULL GROUP BY 1
     )
     SELECT c.id, c.name, c.system, c.kind, coalesce(d.fitted, 0) AS fitted, coalesce(d.failures, 0) AS failures,

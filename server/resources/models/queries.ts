@@ -32,23 +32,21 @@ export function findModels(tx: Transaction, conditions: SQL, rows: number): Prom
     sql`WITH page AS MATERIALIZED (
       SELECT m.* FROM models m WHERE ${conditions} ORDER BY m.maker_key, m.model_key LIMIT ${rows}
     ), machines AS (
-      SELECT u.model_id, count(*)::int AS units FROM units u JOIN page p ON p.shop_id = u.shop_id AND p.id = u.model_id
-      GROUP BY 1
+      SELECT u.model_id, count(*)::int AS units FROM units u WHERE u.model_id IN (SELECT id FROM page) GROUP BY 1
     ), came_back AS MATERIALIZED (
       SELECT DISTINCT e.first_id FROM ${effectiveComebacks} e WHERE e.is_counted
     ), work AS (
       SELECT r.model_id, count(*)::int AS repairs,
         count(*) FILTER (WHERE f.repair_id IS NOT NULL)::int AS size,
         count(b.first_id) FILTER (WHERE f.repair_id IS NOT NULL)::int AS came_back
-      FROM repairs r JOIN page p ON p.shop_id = r.shop_id AND p.id = r.model_id
+      FROM repairs r
       LEFT JOIN repair_facts f ON f.shop_id = r.shop_id AND f.repair_id = r.id AND f.left_out IS NULL
       LEFT JOIN came_back b ON b.first_id = r.id
-      GROUP BY 1
+      WHERE r.model_id IN (SELECT id FROM page) GROUP BY 1
     ), failed AS (
       SELECT r.model_id, x.component_id, count(*)::int AS failures FROM repair_lines x
       JOIN repairs r ON r.shop_id = x.shop_id AND r.id = x.repair_id
-      JOIN page p ON p.shop_id = r.shop_id AND p.id = r.model_id
-      WHERE x.kind = 'part' AND x.reason = 'failed' GROUP BY 1, 2
+      WHERE r.model_id IN (SELECT id FROM page) AND x.kind = 'part' AND x.reason = 'failed' GROUP BY 1, 2
     ), failures AS (SELECT model_id, sum(failures)::int AS failures FROM failed GROUP BY 1),
     top AS (
       SELECT DISTINCT ON (d.model_id) d.model_id, c.id, c.name FROM failed d

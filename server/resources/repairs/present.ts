@@ -9,11 +9,12 @@ type Around = {
   lines: readonly RepairLineRow[];
   links: Awaited<ReturnType<typeof findLinks>>;
   versions: Awaited<ReturnType<typeof findVersions>>;
+  asOf: string | null;
 };
 
 export function presentRepair(
   row: RepairRow,
-  { lines, links, versions }: Around,
+  { lines, links, versions, asOf }: Around,
   seesPeople: boolean,
 ): RepairWhole {
   const { serialText, unitRefText, engineMaker, engineModel, engineSerial, ...rest } = row;
@@ -30,6 +31,7 @@ export function presentRepair(
     cameBackAs: linked('later'),
     isComebackOf: linked('earlier')[0] ?? null,
     versions,
+    asOf,
   };
 }
 

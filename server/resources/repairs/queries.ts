@@ -2,7 +2,7 @@ import { sql, type SQL } from 'drizzle-orm';
 import { z } from 'zod';
 import { LINE_KINDS, LINE_REASONS, PAY_TYPES, TICKET_TYPES, WORK_DONE } from '../../../shared/basics';
 import type { Transaction } from '../../db/client';
-import { daysOfReturn, effectiveComebacks } from '../../db/effective-comebacks';
+import { daysOfReturn, effectiveComebacks, returnedOn } from '../../db/effective-comebacks';
 import { modelName, namedColumn, selectRows, unitName } from '../../db/rows';
 
 const listedRow = z.object({
@@ -38,6 +38,10 @@ const partsCents = sql`(SELECT coalesce(sum(x.amount_cents), 0) FROM repair_line
 const totalCents = sql`(SELECT coalesce(sum(x.amount_cents), 0) + coalesce(r.labor_amount_cents, sum(x.labor_amount_cents), 0)
   FROM repair_lines x WHERE x.shop_id = r.shop_id AND x.repair_id = r.id)::int`;
 
+/** Of a repair that a return names, looked up only where it is needed: few returns touch a page. */
+const ofRepair = (column: 'return_id' | 'first_id', value: SQL) =>
+  sql`(SELECT ${value} FROM repairs s WHERE s.id = e.${sql.raw(column)})`;
+
 /** One page, newest work first. `after` is the sort key of the last row seen. */
 export function findRepairs(
   tx: Transaction,
@@ -58,13 +62,11 @@ export function findRepairs(
       WHERE e.is_counted
         AND (e.first_id IN (SELECT id FROM page) OR e.return_id IN (SELECT id FROM page))
     ), came_back AS (
-      SELECT e.first_id, min(${daysOfReturn}) AS days FROM returns e
-      JOIN repairs f ON f.shop_id = current_shop_id() AND f.id = e.first_id
-      JOIN repairs s ON s.shop_id = current_shop_id() AND s.id = e.return_id
-      GROUP BY e.first_id
+      SELECT e.first_id, min(coalesce(e.days, greatest(0, ${ofRepair('return_id', returnedOn)}
+        - ${ofRepair('first_id', sql`s.work_on`)}))) AS days
+      FROM returns e GROUP BY e.first_id
     ), comes_from AS (
-      SELECT e.return_id, f.id, f.number FROM returns e
-      JOIN repairs f ON f.shop_id = current_shop_id() AND f.id = e.first_id
+      SELECT e.return_id, e.first_id AS id, ${ofRepair('first_id', sql`s.number`)} AS number FROM returns e
     )
     SELECT r.id, r.number, l.name AS location, r.ticket_type AS "ticketType", r.work_on AS "workOn",
       r.closed_on AS "closedOn", ${named('u', unitName)} AS unit, ${named('m', modelName)} AS model,

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import type { RepairWhole, repairQuery } from '../../../shared/repairs';
+import { lastAnalysis } from '../../db/last-analysis';
 import { ownTechnicianId } from '../../db/own-technician';
 import { withShop } from '../../db/tenancy';
 import type { Deps } from '../../deps';
@@ -48,6 +49,7 @@ export function readRepair(deps: Deps, actor: Actor, id: string): Promise<Repair
     const lines = await findLines(tx, id);
     const links = await findLinks(tx, id);
     const versions = await findVersions(tx, id);
-    return presentRepair(row, { lines, links, versions }, maySeePeople(actor));
+    const asOf = (await lastAnalysis(tx))?.asOf ?? null;
+    return presentRepair(row, { lines, links, versions, asOf }, maySeePeople(actor));
   });
 }
