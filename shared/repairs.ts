@@ -118,5 +118,7 @@ export const repairWhole = z.strictObject({
   cameBackAs: z.array(linkedRepair),
   isComebackOf: linkedRepair.nullable(),
   versions: z.array(z.strictObject({ version: z.number().int(), replacedAt: instant })),
+  /** Until which day it is known what came back; null before the records were first read together. */
+  asOf: day.nullable(),
 });
 export type RepairWhole = z.infer<typeof repairWhole>;

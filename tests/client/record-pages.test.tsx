@@ -156,6 +156,7 @@ const REPAIR: RepairWhole = {
   cameBackAs: [],
   isComebackOf: null,
   versions: [],
+  asOf: '2026-07-24',
 };
 const openRepair = (change: Partial<RepairWhole> = {}) =>
   renderPage(`/repairs/${REPAIR.id}`, { [`GET /repairs/${REPAIR.id}`]: { ...REPAIR, ...change } });
@@ -180,6 +181,12 @@ describe('a repair', () => {
   it.each<[string, Partial<RepairWhole>, string]>([
     ['held', { workOn: '2026-04-01' }, 'The work held'],
     ['is still young', { workOn: '2026-07-04' }, 'of its 90 days 20 days are over'],
+    ['was never read with the others', { asOf: null }, 'have not been read together yet'],
+    [
+      'is known up to an earlier day',
+      { workOn: '2026-04-01', asOf: '2026-05-01' },
+      'of its 90 days 30 days are over',
+    ],
     ['has no machine', { unit: null }, 'Its machine is not identified'],
     ['is no repair', { ticketType: 'setup' }, 'This was setup'],
     [

@@ -66,18 +66,32 @@ export function UnitTimeline({ stops, start, end, ticks, shapes, label }: UnitTi
         <line x1={x(start)} x2={x(end)} y1={AXIS_Y} y2={AXIS_Y} stroke="var(--color-dim)" strokeWidth="1.4" />
         {labels.map((placed, index) =>
           placed ? (
-            <g key={stops[index]?.id} aria-hidden="true">
-              <line
-                x1={placed.x}
-                x2={placed.x}
-                y1={AXIS_Y - 10}
-                y2={labelY(placed.level) + 3}
-                stroke="var(--color-rule)"
-              />
-              <text x={placed.x} y={labelY(placed.level)} textAnchor={placed.anchor} fill="var(--color-ink)">
-                {placed.text}
-              </text>
-            </g>
+            <line
+              key={stops[index]?.id}
+              x1={placed.x}
+              x2={placed.x}
+              y1={AXIS_Y - 10}
+              y2={labelY(placed.level) + 3}
+              stroke="var(--color-rule)"
+            />
+          ) : null,
+        )}
+        {/* Over all lines, each in a halo: a line to a higher name passes behind a lower one. */}
+        {labels.map((placed, index) =>
+          placed ? (
+            <text
+              key={stops[index]?.id}
+              aria-hidden="true"
+              x={placed.x}
+              y={labelY(placed.level)}
+              textAnchor={placed.anchor}
+              fill="var(--color-ink)"
+              stroke="var(--color-sheet)"
+              strokeWidth="4"
+              paintOrder="stroke"
+            >
+              {placed.text}
+            </text>
           ) : null,
         )}
         {stops.map((stop) => {

@@ -164,6 +164,8 @@ function Cell<Row>({ column, row }: { column: Column<Row>; row: Row }) {
       className={classNames(
         'border-b border-rule py-2 pr-3 align-middle font-text last:pr-0',
         column.align === 'right' ? 'text-right whitespace-nowrap' : 'text-left',
+        // A table that scrolls sideways on a phone need not squeeze its names.
+        column.isRowHeader && 'max-desk:min-w-28',
         column.className,
       )}
     >

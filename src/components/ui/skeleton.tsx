@@ -3,7 +3,11 @@ import { classNames } from '../../lib/class-names';
 /** A grey place where something will stand, in its real size. */
 export function Skeleton({ className }: { className?: string }) {
   return (
-    <div aria-hidden="true" className={classNames('animate-pulse rounded-bench bg-rule/60', className)} />
+    <div
+      aria-hidden="true"
+      data-skeleton
+      className={classNames('animate-pulse rounded-bench bg-rule/60', className)}
+    />
   );
 }
 

@@ -5,10 +5,10 @@ import type { Formats } from '../../lib/format';
 import { paths } from '../../paths';
 import { TICKET_WORDS } from '../../lib/record-words';
 
-type Props = { repair: RepairWhole; windowDays: number; today: string; formats: Formats };
+type Props = { repair: RepairWhole; windowDays: number; formats: Formats };
 
 /** Whether the work held. */
-export function RepairFinding({ repair, windowDays, today, formats }: Props) {
+export function RepairFinding({ repair, windowDays, formats }: Props) {
   const [back] = repair.cameBackAs;
   if (back) {
     return (
@@ -36,7 +36,12 @@ export function RepairFinding({ repair, windowDays, today, formats }: Props) {
       </Finding>
     );
   }
-  const days = daysBetween(repair.workOn, today);
+  if (repair.asOf === null) {
+    return (
+      <Finding>The records have not been read together yet: nothing is known of what came back.</Finding>
+    );
+  }
+  const days = daysBetween(repair.workOn, repair.asOf);
   if (days < windowDays) {
     return (
       <Finding>

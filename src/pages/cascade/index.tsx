@@ -8,7 +8,7 @@ import { Page } from '../../components/ui/page';
 import { Cases } from '../../features/cascades/cases';
 import { EpisodePicture } from '../../features/cascades/episode-picture';
 import { PairSentence } from '../../features/cascades/finding-sentence';
-import { whereOf } from '../../features/cascades/finding-words';
+import { thing, whereOf } from '../../features/cascades/finding-words';
 import { findingQuery } from '../../features/cascades/queries';
 import { Strength } from '../../features/cascades/strength';
 import { queryClient } from '../../lib/query-client';
@@ -37,9 +37,11 @@ export function Component() {
       aside={modelId ? <Link to={paths.model(modelId)}>{whereOf(finding)}</Link> : whereOf(finding)}
       actions={
         <>
-          <Link to={paths.part(causalComponent.id, { model: modelId })}>How long {finding.causal} lasts</Link>
+          <Link to={paths.part(causalComponent.id, { model: modelId })}>
+            How long {thing(finding.causal)} lasts
+          </Link>
           <Link to={paths.part(resultantComponent.id, { model: modelId })}>
-            How long {finding.resultant} lasts
+            How long {thing(finding.resultant)} lasts
           </Link>
           <Button look="text" onClick={() => print()}>
             Print

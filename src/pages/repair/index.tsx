@@ -46,9 +46,7 @@ export function Component() {
           </Button>
         </>
       }
-      finding={
-        <RepairFinding repair={repair} windowDays={shop.windowDays} today={shop.today} formats={formats} />
-      }
+      finding={<RepairFinding repair={repair} windowDays={shop.windowDays} formats={formats} />}
     >
       <div className="grid items-start gap-6 desk:grid-cols-[minmax(0,1fr)_292px]">
         <div className="flex min-w-0 flex-col gap-6">
