@@ -59,3 +59,9 @@ export type { FittedLife, Forecast } from './planning/conditional-failure';
 export { expectedFailures } from './planning/expected-failures';
 export type { ExpectedFailures } from './planning/expected-failures';
 export { failureCountQuantile } from './planning/failure-count-quantile';
+
+// What takes what with it
+export * from './cascades/index';
+
+// From closed records to lives, comebacks and rates
+export * from './records/index';
