@@ -10,11 +10,14 @@ export type RateRepair = {
   componentIds: readonly string[];
 };
 
+/** Repairs that are alike in what a rate needs and none of which came back, counted instead of listed. */
+export type AlikeRepairs = Omit<RateRepair, 'id'> & { repairs: number };
+
 /** What a rate needs of a comeback. */
 export type RateComeback = Pick<Comeback, 'firstRepairId' | 'returnDay' | 'isCounted' | 'isOurs'>;
 
-/** A repair with what became of it by the day of the analysis; days are of the window's clock. */
-export type RepairOutcome = RateRepair & {
+/** A repair, or several alike, with what became of it by the day of the analysis; days are of the window's clock. */
+export type RepairOutcome = AlikeRepairs & {
   ageDays: number;
   isReturned: boolean;
   isOurs: boolean;
@@ -22,9 +25,9 @@ export type RepairOutcome = RateRepair & {
   returnedAfterDays: number | null;
 };
 
-/** What became of each repair; a repair counts once, whatever attaches to it. */
+/** What became of each repair; a repair counts once, whatever attaches to it. Those that are counted came to nothing. */
 export function repairOutcomes(
-  repairs: readonly RateRepair[],
+  repairs: readonly (RateRepair | AlikeRepairs)[],
   comebacks: readonly RateComeback[],
   asOfDay: number,
   daysOf: WindowClock,
@@ -37,11 +40,13 @@ export function repairOutcomes(
     returns.set(firstRepairId, { day, isOurs: isOurs || (held?.isOurs ?? false) });
   }
   const outcomes: RepairOutcome[] = [];
-  for (const { id, workDay, modelId, technicianIds, componentIds } of repairs) {
+  for (const repair of repairs) {
+    const { workDay, modelId, technicianIds, componentIds } = repair;
     if (workDay > asOfDay) continue;
-    const back = returns.get(id);
+    const isOne = 'id' in repair;
+    const back = isOne ? returns.get(repair.id) : undefined;
     outcomes.push({
-      id,
+      repairs: isOne ? 1 : repair.repairs,
       workDay,
       modelId,
       technicianIds,

@@ -3,7 +3,7 @@ import { wilsonInterval } from '../rates/wilson-interval';
 import { requireThat } from '../requirement';
 import type { Interval } from '../types';
 import { repairOutcomes } from './comeback-outcomes';
-import type { RateComeback, RateRepair, RepairOutcome } from './comeback-outcomes';
+import type { AlikeRepairs, RateComeback, RateRepair, RepairOutcome } from './comeback-outcomes';
 import { monthAfter, monthBefore, monthBounds, monthOf } from './day-number';
 import { projectReturns, returnCurve } from './project-returns';
 import { groupRows } from './record-types';
@@ -45,6 +45,8 @@ export type ComebackRateRow = {
 
 export type ComebackRateInput = {
   repairs: readonly RateRepair[];
+  /** More repairs, none of which any comeback names: counted, so that a shop of many years need not be listed. */
+  others?: readonly AlikeRepairs[];
   comebacks: readonly RateComeback[];
   asOfDay: number;
   windowDays: number;
@@ -68,7 +70,12 @@ export function comebackRates(
   const { asOfDay, windowDays, by } = input;
   requireThat(windowDays > 0, 'comebackRates', 'a window of more than 0 days');
   const daysOf = windowClock(input.pausedMonths);
-  const outcomes = repairOutcomes(input.repairs, input.comebacks, asOfDay, daysOf);
+  const outcomes = repairOutcomes(
+    [...input.repairs, ...(input.others ?? [])],
+    input.comebacks,
+    asOfDay,
+    daysOf,
+  );
   if (by === 'month') return monthRows(outcomes, asOfDay, windowDays, daysOf);
   const curve = returnCurve(outcomes, windowDays);
   const rows = [...groupByKeys(outcomes, by)].map(([key, group]) => {
@@ -111,7 +118,7 @@ function monthRows(
   for (let month = monthOf(first.workDay); month <= lastMonth; month = monthAfter(month)) {
     const group = groups.get(month) ?? [];
     const maturing = isMaturing(month, asOfDay, windowDays, daysOf);
-    const row = { ...rowOf(month, group), month, maturing, ...limitsOf(group.length, base) };
+    const row = { ...rowOf(month, group), month, maturing, ...limitsOf(sizeOf(group), base) };
     if (maturing)
       row.projected = projectReturns(group, returnCurve(ordered.slice(0, seen), windowDays), windowDays);
     else row.signal = signalOf(row);
@@ -159,10 +166,13 @@ function keysOf(outcome: RepairOutcome, by: 'model' | 'component' | 'technician'
   return [...new Set(by === 'component' ? outcome.componentIds : outcome.technicianIds)];
 }
 
+const sizeOf = (group: readonly RepairOutcome[]): number =>
+  group.reduce((size, { repairs }) => size + repairs, 0);
+
 function rowOf(key: string, group: readonly RepairOutcome[]): ComebackRateRow {
-  const size = group.length;
-  const count = group.filter(({ isReturned }) => isReturned).length;
-  const oursCount = group.filter(({ isOurs }) => isOurs).length;
+  const size = sizeOf(group);
+  const count = sizeOf(group.filter(({ isReturned }) => isReturned));
+  const oursCount = sizeOf(group.filter(({ isOurs }) => isOurs));
   const { estimate: rate, lower, upper } = wilsonInterval(count, size);
   return {
     month: null,

@@ -47,7 +47,7 @@ export type { ComplaintPhrase } from './trouble-words';
 // Rates of return
 export { comebackRates, latestJudgeableMonth } from './comeback-rates';
 export type { ComebackRateInput, ComebackRateRow } from './comeback-rates';
-export type { RateComeback, RateRepair } from './comeback-outcomes';
+export type { AlikeRepairs, RateComeback, RateRepair } from './comeback-outcomes';
 export { byTheDoor, firstVisitCure } from './first-visit-cure';
 export { comebackDrivers } from './comeback-drivers';
 export type { ComebackDriver } from './comeback-drivers';

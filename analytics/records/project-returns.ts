@@ -15,11 +15,11 @@ export function returnCurve(repairs: readonly RepairOutcome[], windowDays: numbe
   if (!repairs.some(({ ageDays }) => ageDays >= windowDays)) return null;
   const returned = new Map<number, number>();
   const running = new Map<number, number>();
-  for (const { returnedAfterDays, ageDays } of repairs) {
+  for (const { returnedAfterDays, ageDays, repairs: alike } of repairs) {
     const isFailed = returnedAfterDays !== null && returnedAfterDays <= windowDays;
     const time = isFailed ? Math.max(SAME_DAY, returnedAfterDays) : Math.min(ageDays, windowDays);
     const counts = isFailed ? returned : running;
-    if (time > 0) counts.set(time, (counts.get(time) ?? 0) + 1);
+    if (time > 0) counts.set(time, (counts.get(time) ?? 0) + alike);
   }
   const rows = (counts: Map<number, number>, failed: boolean) =>
     [...counts].map(([time, weight]) => ({ time, weight, failed }));
@@ -45,12 +45,14 @@ export function projectReturns(
   if (repairs.length === 0 || returnedBy === null) return null;
   const byWindow = returnedBy(windowDays);
   let expected = 0;
-  for (const { isReturned, ageDays } of repairs) {
-    if (isReturned) expected++;
+  let size = 0;
+  for (const { isReturned, ageDays, repairs: alike } of repairs) {
+    size += alike;
+    if (isReturned) expected += alike;
     else if (ageDays < windowDays) {
       const byNow = returnedBy(ageDays);
-      if (byNow < 1) expected += (byWindow - byNow) / (1 - byNow);
+      if (byNow < 1) expected += (alike * (byWindow - byNow)) / (1 - byNow);
     }
   }
-  return expected / repairs.length;
+  return expected / size;
 }

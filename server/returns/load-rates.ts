@@ -1,7 +1,7 @@
 import { sql } from 'drizzle-orm';
 import { z } from 'zod';
 import type { Comeback } from '../../analytics/records/comeback-types';
-import type { RateRepair } from '../../analytics/records/comeback-outcomes';
+import type { AlikeRepairs, RateRepair } from '../../analytics/records/comeback-outcomes';
 import { COMEBACK_REASONS } from '../../shared/comebacks';
 import type { Transaction } from '../db/client';
 import { effectiveComebacks, returnedOn } from '../db/effective-comebacks';
@@ -15,30 +15,68 @@ const repairRow = z.object({
   technicianIds: z.array(z.string()),
 });
 
+const JUDGED = sql`repairs r JOIN repair_facts f ON f.shop_id = r.shop_id AND f.repair_id = r.id AND f.left_out IS NULL`;
+
+const workedBetween = ({ from, to }: { from?: string | undefined; to?: string | undefined }) =>
+  allOf([from ? sql`r.work_on >= ${from}` : undefined, to ? sql`r.work_on <= ${to}` : undefined]);
+
 /**
  * The repairs that could come back, as the last analysis judged them: an identified machine, a repair, not
  * maintenance only. A repair that came in since waits for the next analysis, as its return does.
  */
-export function loadRateRepairs(
-  tx: Transaction,
-  { from, to, withTechnicians = false }: { from?: string; to?: string; withTechnicians?: boolean } = {},
-): Promise<RateRepair[]> {
-  const technicians = withTechnicians
-    ? sql`ARRAY(SELECT rt.technician_id::text FROM repair_technicians rt
-        WHERE rt.shop_id = r.shop_id AND rt.repair_id = r.id)`
-    : sql`'{}'::text[]`;
+export function loadRateRepairs(tx: Transaction, range: { from: string; to: string }): Promise<RateRepair[]> {
   return selectRows(
     tx,
     repairRow,
     sql`SELECT r.id, r.work_on - DATE '1970-01-01' AS "workDay", r.model_id AS "modelId",
-      f.trouble_component_ids::text[] AS "componentIds", ${technicians} AS "technicianIds"
-    FROM repairs r JOIN repair_facts f ON f.shop_id = r.shop_id AND f.repair_id = r.id
-    WHERE ${allOf([
-      sql`f.left_out IS NULL`,
-      from ? sql`r.work_on >= ${from}` : undefined,
-      to ? sql`r.work_on <= ${to}` : undefined,
-    ])} ORDER BY r.work_on, r.id`,
+      f.trouble_component_ids::text[] AS "componentIds", '{}'::text[] AS "technicianIds"
+    FROM ${JUDGED} WHERE ${workedBetween(range)} ORDER BY r.work_on, r.id`,
   );
+}
+
+const countedRow = repairRow.extend({ id: z.string().nullable(), repairs: z.number() });
+
+/**
+ * The same for rates by one key, counted: only repairs that a return names are listed, the others are counted where
+ * they are alike. Which day a repair is of matters to a month; to other keys no longer once it is as old as the window.
+ */
+export async function countRateRepairs(
+  tx: Transaction,
+  {
+    by,
+    asOf,
+    windowDays,
+    ...range
+  }: {
+    by: 'month' | 'model' | 'component' | 'technician';
+    asOf: string;
+    windowDays: number;
+    from?: string | undefined;
+    to?: string | undefined;
+  },
+): Promise<{ repairs: RateRepair[]; others: AlikeRepairs[] }> {
+  const workOn =
+    by === 'month'
+      ? sql`r.work_on`
+      : sql`CASE WHEN n.id IS NULL THEN greatest(r.work_on, ${asOf}::date - ${windowDays}::int) ELSE r.work_on END`;
+  const technicians = sql`LEFT JOIN (SELECT rt.repair_id, array_agg(rt.technician_id::text) AS ids
+    FROM repair_technicians rt GROUP BY 1) t ON t.repair_id = r.id`;
+  const rows = await selectRows(
+    tx,
+    countedRow,
+    sql`WITH named AS MATERIALIZED (SELECT DISTINCT e.first_id AS id FROM ${effectiveComebacks} e)
+    SELECT n.id, ${workOn} - DATE '1970-01-01' AS "workDay",
+      ${by === 'model' ? sql`r.model_id` : sql`NULL`} AS "modelId",
+      ${by === 'component' ? sql`f.trouble_component_ids::text[]` : sql`'{}'::text[]`} AS "componentIds",
+      ${by === 'technician' ? sql`coalesce(t.ids, '{}')` : sql`'{}'::text[]`} AS "technicianIds",
+      count(*)::int AS repairs
+    FROM ${JUDGED} LEFT JOIN named n ON n.id = r.id ${by === 'technician' ? technicians : sql.empty()}
+    WHERE ${workedBetween(range)} GROUP BY 1, 2, 3, 4, 5`,
+  );
+  return {
+    repairs: rows.flatMap(({ id, repairs: _, ...row }) => (id === null ? [] : [{ id, ...row }])),
+    others: rows.flatMap(({ id, ...row }) => (id === null ? [row] : [])),
+  };
 }
 
 const comebackRow = z.object({

@@ -11,7 +11,7 @@ import type { Deps } from '../../deps';
 import type { Actor } from '../../http/actor';
 import { forbidden } from '../../http/errors';
 import { permissionFor } from '../../http/permission';
-import { loadRateRepairs, loadRateReturns } from '../../returns/load-rates';
+import { countRateRepairs, loadRateReturns } from '../../returns/load-rates';
 import { hidesShopAverage } from '../../returns/shop-average';
 import { findNames } from './queries';
 
@@ -46,12 +46,12 @@ const answer = (data: RateRow[]) => ({ data, nextCursor: null });
 async function ratesBy(tx: Transaction, { by, from, to }: RateQuery): Promise<RateRow[]> {
   const asOf = (await lastAnalysis(tx))?.asOf;
   if (!asOf) return [];
-  const range = by === 'month' ? {} : { ...(from ? { from } : {}), ...(to ? { to } : {}) };
-  const repairs = await loadRateRepairs(tx, { ...range, withTechnicians: by === 'technician' });
-  const comebacks = await loadRateReturns(tx);
   const [shop] = await tx.select({ windowDays: shops.windowDays }).from(shops);
   const windowDays = shop?.windowDays ?? 90;
-  const rows = comebackRates({ by, repairs, comebacks, windowDays, asOfDay: dayNumber(asOf) });
+  const range = by === 'month' ? {} : { from, to };
+  const { repairs, others } = await countRateRepairs(tx, { by, asOf, windowDays, ...range });
+  const comebacks = await loadRateReturns(tx);
+  const rows = comebackRates({ by, repairs, others, comebacks, windowDays, asOfDay: dayNumber(asOf) });
   if (by === 'month') {
     return rows
       .filter(({ key }) => (!from || key >= from.slice(0, 7)) && (!to || key <= to.slice(0, 7)))

@@ -24,22 +24,23 @@ const WORDS: Record<ComebackReason, string | null> = {
   undetermined: null,
 };
 
-/** What the comebacks of twelve months of work are about, furthest beyond the shop's average first. */
+/** The days of the twelve months up to one. */
+export function twelveMonthsTo(lastMonth: string): { firstDay: number; lastDay: number } {
+  let firstMonth = lastMonth;
+  for (let back = 1; back < MONTHS; back++) firstMonth = monthBefore(firstMonth);
+  return { firstDay: monthBounds(firstMonth).firstDay, lastDay: monthBounds(lastMonth).lastDay };
+}
+
+/** What the comebacks of these repairs are about, furthest beyond the shop's average first. */
 export async function driversOf(
   tx: Transaction,
   input: {
     repairs: readonly RateRepair[];
     comebacks: readonly RateReturn[];
     costs: ReadonlyMap<string, number>;
-    lastMonth: string;
   },
 ): Promise<MonthReview['drivers']> {
-  let firstMonth = input.lastMonth;
-  for (let back = 1; back < MONTHS; back++) firstMonth = monthBefore(firstMonth);
-  const { firstDay } = monthBounds(firstMonth);
-  const { lastDay } = monthBounds(input.lastMonth);
-  const repairs = input.repairs.filter(({ workDay }) => workDay >= firstDay && workDay <= lastDay);
-  const drivers = comebackDrivers({ repairs, comebacks: input.comebacks })
+  const drivers = comebackDrivers(input)
     .filter(({ componentId }) => componentId !== null)
     .slice(0, MOST_ROWS);
   const components = await findNames(

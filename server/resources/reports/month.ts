@@ -1,6 +1,6 @@
 import type { z } from 'zod';
 import { comebackRates, latestJudgeableMonth } from '../../../analytics/records/comeback-rates';
-import { dayNumber, monthOf } from '../../../analytics/records/day-number';
+import { dayNumber, dayText, monthOf } from '../../../analytics/records/day-number';
 import { byTheDoor, firstVisitCure } from '../../../analytics/records/first-visit-cure';
 import type { MonthReview, monthQuery } from '../../../shared/reports';
 import { businessDay } from '../../db/business-day';
@@ -11,10 +11,15 @@ import { withShop } from '../../db/tenancy';
 import type { Deps } from '../../deps';
 import type { Actor } from '../../http/actor';
 import { forbidden } from '../../http/errors';
-import { loadRateRepairs, loadRateReturns, type RateReturn } from '../../returns/load-rates';
+import {
+  countRateRepairs,
+  loadRateRepairs,
+  loadRateReturns,
+  type RateReturn,
+} from '../../returns/load-rates';
 import { hidesShopAverage } from '../../returns/shop-average';
 import { presentRate } from './comeback-rate';
-import { driversOf } from './drivers';
+import { driversOf, twelveMonthsTo } from './drivers';
 import { findCosts, findCounts, findSystems } from './queries';
 import { todosOf } from './todos';
 
@@ -36,19 +41,22 @@ export function reviewMonth(
     const { windowDays, doorRateCents } = shop ?? { windowDays: 90, doorRateCents: 0 };
     const { repairsInAll, unidentified, ...waiting } = await findCounts(tx);
     const asOf = (await lastAnalysis(tx))?.asOf ?? (await businessDay(tx, deps.now()));
-    const repairs = await loadRateRepairs(tx);
-    const comebacks = await loadRateReturns(tx);
     const asOfDay = dayNumber(asOf);
-    const rows = comebackRates({ by: 'month', repairs, comebacks, windowDays, asOfDay });
-    const latest = latestJudgeableMonth(asOfDay, windowDays);
-    const asked = query.month ?? latest;
+    const comebacks = await loadRateReturns(tx);
+    const counted = await countRateRepairs(tx, { by: 'month', asOf, windowDays });
+    const rows = comebackRates({ by: 'month', ...counted, comebacks, windowDays, asOfDay });
+    const asked = query.month ?? latestJudgeableMonth(asOfDay, windowDays);
     const headline = rows.find(({ key }) => key === asked);
+    const { firstDay, lastDay } = twelveMonthsTo(asked);
+    const repairs = await loadRateRepairs(tx, { from: dayText(firstDay), to: dayText(lastDay) });
     const ofMonth = repairs.filter(({ workDay }) => monthOf(workDay) === asked);
     const { cured, of, interval } = firstVisitCure({ repairs: ofMonth, comebacks, windowDays, asOfDay });
     const back = countedIn(comebacks, asked, new Set(ofMonth.map(({ id }) => id)));
     const costs = await findCosts(
       tx,
-      comebacks.map(({ id }) => id),
+      comebacks.flatMap(({ id, firstWorkDay }) =>
+        firstWorkDay >= firstDay && firstWorkDay <= lastDay ? [id] : [],
+      ),
       doorRateCents,
     );
     const isSignal = headline?.signal === 'high' || headline?.signal === 'low';
@@ -67,7 +75,7 @@ export function reviewMonth(
       byTheDoor: byTheDoor(comebacks, monthOf(asOfDay)),
       costCents: back.reduce((sum, { id }) => sum + (costs.get(id) ?? 0), 0),
       costOfComebacks: back.length,
-      drivers: await driversOf(tx, { repairs, comebacks, costs, lastMonth: asked }),
+      drivers: await driversOf(tx, { repairs, comebacks, costs }),
       todos: todosOf({ ...waiting, unidentified }),
     };
   });
