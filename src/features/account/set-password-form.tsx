@@ -45,6 +45,7 @@ export function SetPasswordForm() {
   return (
     <form onSubmit={submit} noValidate className="flex flex-col gap-4">
       <FormError>{failure ?? errors.token?.message}</FormError>
+      {failure && <Link to={paths.forgot()}>Ask for a new link</Link>}
       <Field label="New password" hint="At least 12 characters." error={errors.password?.message}>
         {(control) => (
           <TextInput

@@ -13,6 +13,7 @@ import { People } from '../../features/settings/people';
 import { ShopForm } from '../../features/settings/shop-form';
 import { Technicians } from '../../features/settings/technicians';
 import { You } from '../../features/settings/you';
+import { requireArea } from '../../lib/require-area';
 import { useCan } from '../../lib/session';
 import { paths, SETTINGS_SECTIONS, type SettingsSection } from '../../paths';
 
@@ -32,8 +33,12 @@ const SECTIONS: Record<
 
 const sectionOf = (name: string | undefined) => SETTINGS_SECTIONS.find((section) => section === name);
 
-export function loader({ params }: LoaderFunctionArgs) {
-  return sectionOf(params['section']) ? null : redirect(paths.settings());
+export async function loader({ params }: LoaderFunctionArgs) {
+  const section = sectionOf(params['section']);
+  if (!section) return redirect(paths.settings());
+  const { area } = SECTIONS[section];
+  if (area !== null) await requireArea(area);
+  return null;
 }
 
 export const ErrorBoundary = RouteError;
