@@ -6,6 +6,7 @@ export const DESK = { width: 1280, height: 900 };
 export const PHONE = { width: 390, height: 844 };
 const PASSWORD = 'witness-mark-demo';
 
+type Mailbox = 'owner' | 'manager' | 'tech' | 'books' | 'counter';
 type Look = { viewport?: typeof DESK; dark?: boolean };
 
 /** A real Chromium for a file of tests; whatever the console complains of fails the test in which it happened. */
@@ -56,10 +57,7 @@ export function useBrowser() {
   return {
     open,
     /** A page on which a person of the demo shop is signed in. */
-    async signedIn(
-      mailbox: 'owner' | 'manager' | 'tech' | 'books' | 'counter',
-      look: Look = {},
-    ): Promise<Page> {
+    async signedIn(mailbox: Mailbox, look: Look = {}): Promise<Page> {
       const page = await open(look);
       await page.goto('/sign-in');
       await page.getByLabel('E-mail').fill(`${mailbox}@millrace.example`);
@@ -68,14 +66,48 @@ export function useBrowser() {
       await page.waitForURL((url) => url.pathname !== '/sign-in');
       return page;
     },
+    /** The same without the way through the form: straight to a page, once it is whole. */
+    async at(mailbox: Mailbox, path: string, look: Look = {}): Promise<Page> {
+      const page = await open(look);
+      await page.request.post('/api/v1/session', {
+        data: { email: `${mailbox}@millrace.example`, password: PASSWORD },
+      });
+      await goTo(page, path);
+      return page;
+    },
   };
 }
 
+/** Opens an address and waits for the page with its charts. */
+export async function goTo(page: Page, path: string): Promise<void> {
+  await page.goto(path);
+  await page.getByRole('heading', { level: 1 }).first().waitFor();
+  await page.waitForLoadState('networkidle');
+  // A chart whose code has come is drawn a moment later.
+  await page.locator('figure [data-skeleton]').first().waitFor({ state: 'detached' });
+}
+
+/** What the API answers the person of this page. */
+export async function answerOf<Answer>(page: Page, path: string): Promise<Answer> {
+  const answer = await page.request.get(`/api/v1${path}`);
+  expect(answer.status()).toBe(200);
+  return (await answer.json()) as Answer;
+}
+
+/** Text as people read it: thin and hard spaces are spaces. */
+export const plain = (text: string): string => text.replace(/\s+/g, ' ').trim();
+
+const AXE_TAGS = ['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'];
+
 /** Nothing that axe knows to hinder people, by WCAG 2.2 AA. */
-export async function expectNoBarriers(page: Page): Promise<void> {
-  const { violations } = await new AxeBuilder({ page })
-    .withTags(['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa', 'best-practice'])
-    .analyze();
+export async function expectNoBarriers(
+  page: Page,
+  of: 'everything' | 'colors' = 'everything',
+): Promise<void> {
+  const axe = new AxeBuilder({ page });
+  const { violations } = await (
+    of === 'colors' ? axe.withRules(['color-contrast', 'link-in-text-block']) : axe.withTags(AXE_TAGS)
+  ).analyze();
   expect(
     violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ target }) => target.join(' ')).join(' | ')}`),
   ).toEqual([]);
