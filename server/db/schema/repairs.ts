@@ -69,7 +69,7 @@ export const repairs = pgTable(
     unique('repairs_number').on(t.shopId, t.locationId, t.numberKey).nullsNotDistinct(),
     index('repairs_work_on').on(t.shopId, t.workOn, t.id),
     index('repairs_unit').on(t.shopId, t.unitId, t.workOn),
-    index('repairs_model').on(t.shopId, t.modelId, t.workOn),
+    index('repairs_model').on(t.shopId, t.modelId, t.workOn, t.id, t.unitId),
     index('repairs_customer').on(t.shopId, t.customerId),
     foreignKey({ columns: [t.shopId], foreignColumns: [shops.id] }).onDelete('cascade'),
     foreignKey({
@@ -154,6 +154,12 @@ export const repairLines = pgTable(
     primaryKey({ columns: [t.shopId, t.id] }),
     index('repair_lines_repair').on(t.shopId, t.repairId, t.position),
     index('repair_lines_component').on(t.shopId, t.componentId),
+    index('repair_lines_failed')
+      .on(t.shopId, t.repairId, t.componentId)
+      .where(sql`${t.kind} = 'part' AND ${t.reason} = 'failed'`),
+    index('repair_lines_unknown')
+      .on(t.shopId, t.componentId)
+      .where(sql`${t.kind} = 'part' AND ${t.reason} = 'unknown'`),
     index('repair_lines_part').on(t.shopId, t.partId),
     foreignKey({
       columns: [t.shopId, t.repairId],
