@@ -86,25 +86,21 @@ function drain(server: Server): Promise<void> {
 
 async function main() {
   const config = readConfig();
+  const starting = start(config);
   let isEnding = false;
-  let end: (() => Promise<void>) | undefined;
   const stop = () => {
     if (isEnding) return;
     isEnding = true;
     say('\nStopping');
-    void end?.().then(() => process.exit(0));
+    // What is still being started is let come up first, so that it can be ended in order.
+    void starting.then(({ end }) => end()).then(() => process.exit(0));
   };
   process.on('SIGINT', stop);
   process.on('SIGTERM', stop);
-  const started = await start(config);
-  end = started.end;
-  if (isEnding) {
-    await end();
-    process.exit(0);
-  }
+  const { databaseUrl } = await starting;
+  if (isEnding) return;
   say(`\nWitness Mark is at ${config.publicUrl}`);
-  const signIns =
-    config.demo && config.environment !== 'production' ? await demoSignIns(started.databaseUrl) : [];
+  const signIns = config.demo && config.environment !== 'production' ? await demoSignIns(databaseUrl) : [];
   if (signIns.length > 0) {
     say(`Demo sign-ins (password ${DEMO_PASSWORD}):`);
     for (const { email, role } of signIns) say(`  ${email}  ${role}`);

@@ -5,10 +5,7 @@ export const id = z.uuid();
 export const day = z.iso.date();
 export const instant = z.iso.datetime();
 export const cents = z.number().int();
-/** A share of one, with its limits; null is undefined (no trials). */
-export const share = z.number().min(0).max(1);
 export const interval = z.strictObject({ lower: z.number().nullable(), upper: z.number().nullable() });
-export type Interval = z.infer<typeof interval>;
 
 /** A list, and only a list, answers so. */
 export const listOf = <Item extends z.ZodType>(item: Item) =>
@@ -45,7 +42,6 @@ export const WORK_DONE = [
 export const PAY_TYPES = ['customer', 'warranty', 'shop'] as const;
 export const COMPONENT_KINDS = ['unset', 'service_item', 'only_when_bad', 'depends'] as const;
 export const CLOCKS = ['hours', 'days'] as const;
-export type Clock = (typeof CLOCKS)[number];
 
 /** A component, unit, model or repair named where it is linked to. */
 export const named = z.strictObject({ id, name: z.string() });

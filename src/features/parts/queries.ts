@@ -36,12 +36,6 @@ export const partLifeQuery = (component: string, filters: LifeFilters) =>
     queryFn: ({ signal }) => apiGet<PartLife>('/part-life', { component, ...filters }, signal),
   });
 
-export const partNumbersQuery = (componentId: string) =>
-  queryOptions({
-    queryKey: ['parts', 'numbers', componentId],
-    queryFn: ({ signal }) => apiGet<List<PartListed>>('/parts', { componentId, limit: ALL_IN_ONE }, signal),
-  });
-
 export const familiesQuery = queryOptions({
   queryKey: ['parts', 'families'],
   queryFn: ({ signal }) => apiGet<List<Family>>('/families', { limit: ALL_IN_ONE }, signal),
