@@ -106,7 +106,9 @@ function numberColumns(linkTo: Props['linkTo'], formats: Formats, ages: Ages): C
         return half ? (
           <>
             {ages.of(half.estimate)}
-            <span className="block text-xs text-dim">{ages.range(half, half.estimate)}</span>
+            <span className="block text-xs whitespace-normal text-dim">
+              {ages.range(half, half.estimate)}
+            </span>
           </>
         ) : (
           <span className="text-xs text-dim">too few</span>

@@ -120,7 +120,7 @@ export function Component() {
         />
       }
     >
-      <div className="grid items-start gap-6 desk:grid-cols-[minmax(0,1fr)_330px]">
+      <div className="grid items-start gap-6 desk:grid-cols-[minmax(0,1fr)_344px]">
         <div className="flex min-w-0 flex-col gap-6">
           {life.lives > 0 && (
             <LifePicture
