@@ -56,7 +56,9 @@ export const repairFacts = pgTable(
   },
   (t) => [
     primaryKey({ columns: [t.shopId, t.repairId] }),
-    index('repair_facts_judged').on(t.shopId, t.repairId).where(sql`${t.leftOut} IS NULL`),
+    index('repair_facts_judged')
+      .on(t.shopId, t.repairId)
+      .where(sql`${t.leftOut} IS NULL`),
     foreignKey({
       columns: [t.shopId, t.repairId],
       foreignColumns: [repairs.shopId, repairs.id],

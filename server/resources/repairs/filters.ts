@@ -32,15 +32,19 @@ export function repairConditions(filter: RepairFilter, options: { searchesCustom
   ]);
 }
 
-/** What people type into the one box: a number, serial, tag, name, phone, or words of the complaint. */
+/**
+ * What people type into the one box: a number, serial, tag, name, phone, or words of the complaint. Folded and compared
+ * once for all texts of a row, since every row may have to be looked at.
+ */
 function textCondition(q: string, searchesCustomers: boolean): SQL {
   const pattern = anywhere(q);
+  const holdsIt = (...texts: SQL[]) =>
+    sql`lower(concat_ws(chr(10), ${sql.join(texts, sql`, `)})) LIKE lower(${pattern})`;
   const digits = q.replace(/\D/g, '');
   const phone =
     digits.length >= 4 ? sql`OR regexp_replace(phone, '\\D', '', 'g') LIKE ${`%${digits}%`}` : sql.empty();
   const customer = sql`OR r.customer_id IN (SELECT id FROM customers WHERE name ILIKE ${pattern} ${phone})`;
-  return sql`(r.number ILIKE ${pattern} OR r.complaint ILIKE ${pattern} OR r.serial_text ILIKE ${pattern}
-    OR r.unit_ref_text ILIKE ${pattern}
-    OR r.unit_id IN (SELECT id FROM units WHERE serial ILIKE ${pattern} OR unit_ref ILIKE ${pattern})
+  return sql`(${holdsIt(sql`r.number`, sql`r.complaint`, sql`r.serial_text`, sql`r.unit_ref_text`)}
+    OR r.unit_id IN (SELECT id FROM units WHERE ${holdsIt(sql`serial`, sql`unit_ref`)})
     ${searchesCustomers ? customer : sql.empty()})`;
 }
