@@ -49,7 +49,7 @@ export async function benchReadApi(): Promise<{ name: string; value: number; uni
 }
 
 /** Makes the shop and an owner, whose address it gives. */
-export async function arrange(databaseUrl: string): Promise<string> {
+async function arrange(databaseUrl: string): Promise<string> {
   const migrator = new pg.Client({ connectionString: databaseUrl });
   await migrator.connect();
   try {
@@ -69,7 +69,7 @@ export async function arrange(databaseUrl: string): Promise<string> {
   }
 }
 
-export async function measure(databaseUrl: string, dataDir: string, email: string) {
+async function measure(databaseUrl: string, dataDir: string, email: string) {
   const database = openServiceDatabase(databaseUrl);
   try {
     const app = createApp({
