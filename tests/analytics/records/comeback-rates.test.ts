@@ -50,6 +50,32 @@ const byMonth = (
 ): ComebackRateRow[] =>
   comebackRates({ ...records, asOfDay: dayNumber(asOf), windowDays: WINDOW, by: 'month' });
 
+test('repairs that did not come back give the same rows counted as listed', () => {
+  const { repairs, comebacks } = months(Array.from({ length: 12 }, (_, at) => [20 + at, at % 4]));
+  const named = new Set(comebacks.map(({ firstRepairId }) => firstRepairId));
+  const counts = new Map<number, number>();
+  for (const { id, workDay } of repairs)
+    if (!named.has(id)) counts.set(workDay, (counts.get(workDay) ?? 0) + 1);
+  const others = [...counts].map(([workDay, alike]) => {
+    return { workDay, modelId: null, technicianIds: [], componentIds: [], repairs: alike };
+  });
+  const listed = byMonth({ repairs, comebacks }, '2025-01-31');
+  const counted = comebackRates({
+    repairs: repairs.filter(({ id }) => named.has(id)),
+    others,
+    comebacks,
+    asOfDay: dayNumber('2025-01-31'),
+    windowDays: WINDOW,
+    by: 'month',
+  });
+  const bare = (rows: ComebackRateRow[]) => rows.map(({ projected: _, ...row }) => row);
+  expect(bare(counted)).toEqual(bare(listed));
+  const ahead = listed.filter(({ projected }) => projected !== null);
+  expect(ahead.length).toBeGreaterThan(0);
+  for (const { key, projected } of ahead)
+    expect(rowOf(counted, key).projected).toBeCloseTo(projected ?? -1, 12);
+});
+
 describe('the rate of a month', () => {
   test('repairs of the month that came back, over those that could, with Wilson’s interval', () => {
     const { repairs, comebacks } = months([[60, 7]]);
