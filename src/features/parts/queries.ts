@@ -1,12 +1,11 @@
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
 import type { z } from 'zod';
 import type { family } from '../../../shared/administration';
-import type { ComponentListed, changeComponent, partListed, PartLife } from '../../../shared/parts';
+import type { ComponentListed, changeComponent, PartLife } from '../../../shared/parts';
 import { apiGet, apiSend, type List } from '../../lib/api';
 import { notify } from '../../components/ui/toast-store';
 import { ApiError } from '../../lib/api';
 
-export type PartListed = z.infer<typeof partListed>;
 export type Family = z.infer<typeof family>;
 export type ComponentChange = z.infer<typeof changeComponent>;
 export type ComponentKind = ComponentListed['kind'];
