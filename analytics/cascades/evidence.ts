@@ -21,6 +21,9 @@ export type PairEvidence = {
   /** Share of such episodes if the other part failed by chance. */
   chancePromptA: number;
   chancePromptB: number;
+  /** Of the A-first, B-first episodes, those in which a later visit replaced both. */
+  aFirstJoined: number;
+  bFirstJoined: number;
 };
 
 /** Log-likelihoods of the hypotheses on one model: nothing, together, A causes B, B causes A. */
@@ -52,22 +55,30 @@ const logSum = (...logs: number[]) => {
     : high + Math.log(logs.reduce((sum, log) => sum + Math.exp(log - high), 0));
 };
 
-/** Shape of the gamma spread of chance counts about their expectation: a coefficient of variation of one half. */
-const CHANCE_SHAPE = 4;
+/** Shape of the gamma spread of chance counts about their expectation: a coefficient of variation of a third. */
+const CHANCE_SHAPE = 8;
 
 /** Spread of the null order: equal ageing is known only so well. */
-const ORDER_SPREAD = 12;
+const ORDER_SPREAD = 30;
 
 type Order = { first: number; second: number; expectedFirst: number; expectedSecond: number };
+
+const BY_CHANCE = { inflation: 1, shape: CHANCE_SHAPE, evenness: 0 };
+/**
+ * Parts that fail together for a reason of their own lean less to the null order than parts that meet by chance: it
+ * is taken where neither came before, so it runs away where one part hardly ever fails without the other.
+ */
+const BY_COMPANY = { ...BY_CHANCE, evenness: 0.6 };
+const BY_CLOSE_COMPANY = { inflation: 4, shape: 1, evenness: 0.6 };
 
 /** Two counts whose sum is as expected and whose split follows the null ratio, each with its spread. */
 const unordered = (
   { first, second, expectedFirst, expectedSecond }: Order,
-  inflation = 1,
-  shape = CHANCE_SHAPE,
+  { inflation, shape, evenness } = BY_CHANCE,
 ) => {
   const expected = Math.max(expectedFirst + expectedSecond, 2e-3);
-  const share = Math.min(0.95, Math.max(0.05, expectedFirst / expected));
+  const byHazard = Math.min(0.95, Math.max(0.05, expectedFirst / expected));
+  const share = evenness / 2 + (1 - evenness) * byHazard;
   return (
     negativeBinomial(first + second, expected * inflation, shape) +
     betaBinomial(first, first + second, ORDER_SPREAD * share, ORDER_SPREAD * (1 - share))
@@ -76,38 +87,66 @@ const unordered = (
 
 /** Shares of prompt returns that a cause left in may have, averaged over. */
 const PROMPT_SHARES = [0.3, 0.5, 0.7, 0.85, 0.95];
-const PROMPT_SPREAD = 15;
+const PROMPT_SPREAD = 40;
 
 const promptAt = (prompt: number, episodes: number, share: number) =>
   betaBinomial(prompt, episodes, PROMPT_SPREAD * share, PROMPT_SPREAD * (1 - share));
 
-const promptByCause = (prompt: number, episodes: number, chance: number, ownShare: number) =>
-  logSum(
-    ...PROMPT_SHARES.map((share) =>
-      promptAt(prompt, episodes, (1 - ownShare) * Math.max(share, chance) + ownShare * chance),
-    ),
-  ) - Math.log(PROMPT_SHARES.length);
+/** Shares of cures that replace the broken part along with its cause, averaged over. */
+const CURE_SHARES = [0.1, 0.3, 0.5, 0.7, 0.9];
+const CURE_SPREAD = 40;
+/** Parts that meet by chance are hardly ever replaced at one visit after one of them was alone. */
+const CHANCE_JOINED = 0.04;
+const joinedByChance = (joined: number, ordered: number) =>
+  betaBinomial(joined, ordered, 10 * CHANCE_JOINED, 10 * (1 - CHANCE_JOINED));
+const joinedByCompany = (joined: number, ordered: number) => betaBinomial(joined, ordered, 1, 1);
+/** Cause first, both later: a cure that did not hold. */
+const joinedAfterCause = (joined: number, ordered: number) => betaBinomial(joined, ordered, 0.6, 2.4);
+
+type Course = { first: number; prompt: number; chancePrompt: number; joined: number };
+
+/** How the episodes that the resultant part began went on, where a share of them are chance and the rest the cause's. */
+const courseByCause = ({ first, prompt, chancePrompt, joined }: Course, ownShare: number) => {
+  if (first === 0) return 0;
+  const mixed = (linked: number, chance: number) => (1 - ownShare) * linked + ownShare * chance;
+  const prompts = PROMPT_SHARES.map((share) =>
+    promptAt(prompt, first, mixed(Math.max(share, chancePrompt), chancePrompt)),
+  );
+  const cures = CURE_SHARES.map((share) => {
+    const mean = mixed(share, CHANCE_JOINED);
+    return betaBinomial(joined, first, CURE_SPREAD * mean, CURE_SPREAD * (1 - mean));
+  });
+  return logSum(...prompts) + logSum(...cures) - Math.log(PROMPT_SHARES.length * CURE_SHARES.length);
+};
+
+/** Own shares at which the course is reckoned; straight lines between them. */
+const OWN_STEPS = 4;
 
 /** Large sums are taken at so many points. */
 const MOST_TERMS = 48;
 
 /** Episodes that the resultant part alone came before: some by chance, the rest a share of the causal part's episodes. */
-const cured = (order: Order, causal: number, prompt: number, chancePrompt: number) => {
+const cured = (order: Order, causal: number, course: Course) => {
   const { first, expectedFirst } = order;
   const spread = 6 * Math.sqrt(expectedFirst + (expectedFirst * expectedFirst) / 4) + 6;
   const most = Math.min(first, Math.ceil(expectedFirst + spread));
   const step = Math.ceil((most + 1) / MOST_TERMS);
+  const courses = Array.from({ length: OWN_STEPS + 1 }, (_, at) => courseByCause(course, at / OWN_STEPS));
   const terms: number[] = [];
   for (let own = 0; own <= most; own += step) {
     const linked = first - own;
+    const place = (OWN_STEPS * own) / Math.max(first, 1);
+    const low = Math.floor(place);
+    const lowCourse = courses[low] ?? 0;
     terms.push(
       unordered({ ...order, first: own }) +
         betaBinomial(linked, Math.max(causal - own, linked), 2, 3.5) +
+        lowCourse +
+        (place - low) * ((courses[low + 1] ?? lowCourse) - lowCourse) +
         Math.log(step),
     );
   }
-  const ownShare = Math.min(1, expectedFirst / Math.max(first, 1));
-  return logSum(...terms) + promptByCause(prompt, first, chancePrompt, ownShare);
+  return logSum(...terms);
 };
 
 /** Both at the first visit: says that they belong together, nothing of which way; so it is the same for all but chance. */
@@ -144,21 +183,45 @@ export const pairLikelihood = (e: PairEvidence): PairLikelihood => {
   const aChance = promptAt(e.aFirstPrompt, e.aFirst, e.chancePromptA);
   const bChance = promptAt(e.bFirstPrompt, e.bFirst, e.chancePromptB);
   const symmetric = damage(e.aDamaged, e.bDamaged, false) + aChance + bChance;
+  const aCourse: Course = {
+    first: e.aFirst,
+    prompt: e.aFirstPrompt,
+    chancePrompt: e.chancePromptA,
+    joined: e.aFirstJoined,
+  };
+  const bCourse: Course = {
+    first: e.bFirst,
+    prompt: e.bFirstPrompt,
+    chancePrompt: e.chancePromptB,
+    joined: e.bFirstJoined,
+  };
   const leaked = (order: Order, causal: number) => ({
     ...order,
     expectedSecond: order.expectedSecond + LEAK * causal,
   });
   return {
-    nothing: unordered(aFirst) + negativeBinomial(e.together, sameDay, 1) + symmetric,
-    together: logSum(unordered(aFirst), unordered(aFirst, 4, 1)) - Math.log(2) + sameVisit(e) + symmetric,
+    nothing:
+      unordered(aFirst) +
+      negativeBinomial(e.together, sameDay, 1) +
+      joinedByChance(e.aFirstJoined, e.aFirst) +
+      joinedByChance(e.bFirstJoined, e.bFirst) +
+      symmetric,
+    together:
+      logSum(unordered(aFirst, BY_COMPANY), unordered(aFirst, BY_CLOSE_COMPANY)) -
+      Math.log(2) +
+      sameVisit(e) +
+      joinedByCompany(e.aFirstJoined + e.bFirstJoined, e.aFirst + e.bFirst) +
+      symmetric,
     aCauses:
-      cured(leaked(bFirst, e.withA), e.withA, e.bFirstPrompt, e.chancePromptB) +
+      cured(leaked(bFirst, e.withA), e.withA, bCourse) +
       aChance +
+      joinedAfterCause(e.aFirstJoined, e.aFirst) +
       sameVisit(e) +
       damage(e.bDamaged, e.aDamaged, true),
     bCauses:
-      cured(leaked(aFirst, e.withB), e.withB, e.aFirstPrompt, e.chancePromptA) +
+      cured(leaked(aFirst, e.withB), e.withB, aCourse) +
       bChance +
+      joinedAfterCause(e.bFirstJoined, e.bFirst) +
       sameVisit(e) +
       damage(e.aDamaged, e.bDamaged, true),
   };

@@ -97,6 +97,8 @@ const examinePair = (
     bFirstPrompt: 0,
     chancePromptA: 0.3,
     chancePromptB: 0.3,
+    aFirstJoined: 0,
+    bFirstJoined: 0,
   };
   let linkedVisits = 0;
   let aLinked = 0;
@@ -107,13 +109,16 @@ const examinePair = (
     for (const episode of pairEpisodes(unit, pairSteps(unit, a, b), windowDays)) {
       if (!episode.hasA || !episode.hasB) continue;
       const first = episode.steps[0];
+      const isJoined = episode.steps.some(({ hasA, hasB }) => hasA && hasB);
       if (first?.hasA && first.hasB) evidence.together += 1;
       else if (first?.hasA) {
         evidence.aFirst += 1;
         if (isPrompt(unit, episode, windowDays)) evidence.aFirstPrompt += 1;
+        if (isJoined) evidence.aFirstJoined += 1;
       } else {
         evidence.bFirst += 1;
         if (isPrompt(unit, episode, windowDays)) evidence.bFirstPrompt += 1;
+        if (isJoined) evidence.bFirstJoined += 1;
       }
       linkedVisits += episode.steps.length;
       aLinked += episode.steps.filter(({ hasA }) => hasA).length;
@@ -176,6 +181,8 @@ export const unlinkedEvidence = (
     bFirstPrompt: 0,
     chancePromptA: 0.3,
     chancePromptB: 0.3,
+    aFirstJoined: 0,
+    bFirstJoined: 0,
   };
 };
 

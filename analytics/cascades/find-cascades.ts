@@ -141,14 +141,16 @@ const compareFindings = (x: CascadeFinding, y: CascadeFinding) =>
  *    all pairs of the shop alike (frailty: 1 + cv²; the season) is estimated from the pairs that are nothing.
  * 3. *Direction.* Sequence symmetry (Hallas 1996): resultant-first against causal-first, whose ratio under chance
  *    is the ratio of the expected numbers (the null ratio, Tsiropoulos 2009). Traits of a machine cancel in it.
- *    Both at one visit says that they belong together and nothing of which way; a part coded as damage does.
+ *    Both at one visit says that they belong together and nothing of which way; a part coded as damage does, and so
+ *    does which part, alone at first, is replaced again beside the other.
  * 4. *Many pairs.* Each pair has one of four explanations (nothing, together, either causes the other), each with a
  *    likelihood of its counts that is wider than Poisson. Their shares over all pairs are fitted by empirical
  *    Bayes; findings are taken while the mean local false discovery rate stays within the limit (Efron 2010, ch. 5;
  *    the Bayesian form of Benjamini & Hochberg 1995). Declared chains have 0.4 of the limit, all else 0.6;
  *    all of it is for the search where no declared pair was examined.
  * 5. *Few units.* A pair of names that is something is so in an unknown share of the models (of each family, where
- *    families are given): models lend each other strength, and `borrowedFrom` names those that did. A model's own
+ *    families are given): models lend each other strength, and `borrowedFrom` names those that did. A pair of one
+ *    model may also stray from what its names are elsewhere; how many do is fitted to the shop. A model's own
  *    records must still lean the same way, in two or more episodes of four or more visits.
  *
  * Order of replacement is not order of cause, and records alone never test a cause: the strongest word of evidence

@@ -1,3 +1,4 @@
+import { median } from 'simple-statistics';
 import type { ExaminedModel } from './examine';
 import type { UnitHistory } from './histories';
 import { pairEpisodes, pairSteps } from './links';
@@ -105,12 +106,7 @@ export const countEpisodes = (episodes: readonly DirectedEpisode[], windowDays: 
   return counts;
 };
 
-const median = (values: number[]): number | null => {
-  values.sort((a, b) => a - b);
-  const low = values[Math.floor((values.length - 1) / 2)];
-  const high = values[Math.ceil((values.length - 1) / 2)];
-  return low === undefined || high === undefined ? null : (low + high) / 2;
-};
+const medianOf = (values: number[]): number | null => (values.length > 0 ? median(values) : null);
 
 /** From the first replacement of one part to the first of the other, where they are not at one visit. */
 export const medianGaps = (episodes: readonly DirectedEpisode[]) => {
@@ -127,7 +123,7 @@ export const medianGaps = (episodes: readonly DirectedEpisode[]) => {
     const [from, to] = [unit.occasions[first.at]?.hours ?? null, unit.occasions[other.at]?.hours ?? null];
     if (from !== null && to !== null && to >= from) hours.push(to - from);
   }
-  return { medianDays: median(days), medianHoursBetween: median(hours) };
+  return { medianDays: medianOf(days), medianHoursBetween: medianOf(hours) };
 };
 
 /** The episodes with both as cases, in order of unit and day; `directed` says whether an order speaks for or against. */

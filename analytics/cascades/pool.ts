@@ -44,25 +44,48 @@ const namePairs = (
   });
 };
 
+type Outside = { aChains: number; aRepeats: number; bChains: number; bRepeats: number };
+
+/** Other models say how often a part repeats by itself, but count for so many chains at most: elsewhere it may be a result. */
+const LENT_CHAINS = 6;
+
+const blend = (chains: number, repeats: number, lentChains: number, lentRepeats: number) => {
+  const weight = Math.min(1, LENT_CHAINS / Math.max(1, lentChains));
+  return repeatByChance(
+    Math.max(0, chains + weight * lentChains),
+    Math.max(0, repeats + weight * lentRepeats),
+  );
+};
+
 /** What a chance episode of this pair would look like, from the chains that have only one of the two. */
 const withChanceCourse = (named: Named, examined: Examined, windowDays: number): Named => {
-  const outside = { aChains: 0, aRepeats: 0, bChains: 0, bRepeats: 0 };
-  for (const { model, pair, evidence: e } of named.groups.flat()) {
+  const all: Outside = { aChains: 0, aRepeats: 0, bChains: 0, bRepeats: 0 };
+  const outsideOf = ({ model, pair, evidence: e }: Entry): Outside => {
     const both = e.aFirst + e.bFirst + e.together;
     const failures = (component: number) => examined.models[model]?.failures.get(component)?.length ?? 0;
-    outside.aChains += e.withA - both;
-    outside.bChains += e.withB - both;
-    outside.aRepeats += failures(named.a) - e.withA - ((pair?.aLinked ?? 0) - both);
-    outside.bRepeats += failures(named.b) - e.withB - ((pair?.bLinked ?? 0) - both);
+    return {
+      aChains: e.withA - both,
+      aRepeats: failures(named.a) - e.withA - ((pair?.aLinked ?? 0) - both),
+      bChains: e.withB - both,
+      bRepeats: failures(named.b) - e.withB - ((pair?.bLinked ?? 0) - both),
+    };
+  };
+  for (const entry of named.groups.flat()) {
+    const outside = outsideOf(entry);
+    all.aChains += outside.aChains;
+    all.aRepeats += outside.aRepeats;
+    all.bChains += outside.bChains;
+    all.bRepeats += outside.bRepeats;
   }
-  const prompt = (soon: number, chains: number, repeats: number) =>
-    1 - (1 - soon) * (1 - repeatByChance(Math.max(0, chains), Math.max(0, repeats)));
   const complete = (entry: Entry): Entry => {
     const model = examined.models[entry.model];
     const perDay = model ? model.ratePerDay(named.a) + model.ratePerDay(named.b) : 0;
     const soon = soonByChance(perDay * windowDays);
-    const chancePromptA = prompt(soon, outside.aChains, outside.aRepeats);
-    const chancePromptB = prompt(soon, outside.bChains, outside.bRepeats);
+    const own = outsideOf(entry);
+    const repeatA = blend(own.aChains, own.aRepeats, all.aChains - own.aChains, all.aRepeats - own.aRepeats);
+    const repeatB = blend(own.bChains, own.bRepeats, all.bChains - own.bChains, all.bRepeats - own.bRepeats);
+    const chancePromptA = 1 - (1 - soon) * (1 - repeatA);
+    const chancePromptB = 1 - (1 - soon) * (1 - repeatB);
     return { ...entry, evidence: { ...entry.evidence, chancePromptA, chancePromptB } };
   };
   return { ...named, groups: named.groups.map((group) => group.map(complete)) };

@@ -1,12 +1,16 @@
 import { describe, expect, it } from 'vitest';
 import { clopperPearsonInterval } from '../../../analytics/rates/clopper-pearson-interval';
+import { differingShop } from '../../calibrate/links-differ';
 import { scoreShop } from '../../calibrate/shop/score';
-import type { ShopSettings } from '../../calibrate/shop';
+import type { ShopSettings, SimulatedShop } from '../../calibrate/shop';
 import { cascadesOf, shops } from './made-shop';
 
-const measure = (count: number, settings: Partial<ShopSettings>, firstSeed: number) => {
+const measure = (count: number, settings: Partial<ShopSettings>, firstSeed: number) =>
+  measureShops(shops(count, settings, firstSeed));
+
+const measureShops = (made: readonly SimulatedShop[]) => {
   const sum = { found: 0, right: 0, reversed: 0, seen: 0, seenFound: 0, shopsWithAny: 0 };
-  for (const shop of shops(count, settings, firstSeed)) {
+  for (const shop of made) {
     const score = scoreShop(
       shop,
       cascadesOf(shop).findings.filter(({ kind }) => kind === 'cascade'),
@@ -47,6 +51,16 @@ describe('standing on shops of our own making', () => {
     expect(sum.found).toBeGreaterThan(10);
     expect(couldBeAtLeast(sum.right, sum.found, precision)).toBe(true);
     expect(couldBeAtLeast(sum.seenFound, sum.seen, recall)).toBe(true);
+    expect(couldBeAtMost(sum.reversed, sum.found, 0.01)).toBe(true);
+  });
+
+  it('finds links that differ by model, where no other model can lend', () => {
+    const sum = measureShops(
+      [8800, 8801].map((seed) => differingShop({ seed, unitsPerModel: 40, models: 10 })),
+    );
+    expect(sum.found).toBeGreaterThan(20);
+    expect(couldBeAtLeast(sum.right, sum.found, 0.95)).toBe(true);
+    expect(couldBeAtLeast(sum.seenFound, sum.seen, 0.85)).toBe(true);
     expect(couldBeAtMost(sum.reversed, sum.found, 0.01)).toBe(true);
   });
 
