@@ -12,9 +12,9 @@ export const costOfReturn = (doorRateCents: number): SQL => sql`(
       CASE WHEN count(x.labor_hours) > 0
         THEN sum(x.labor_hours) FILTER (WHERE ${isGivenAway(sql`coalesce(x.pay_type, s.pay_type)`, sql`x.labor_amount_cents`)})
         ELSE CASE WHEN ${isGivenAway(sql`s.pay_type`, sql`s.labor_amount_cents`)} THEN s.labor_hours ELSE 0 END
-      END, 0))::int
+      END, 0))::float8
     + coalesce(sum(x.cost_cents) FILTER (WHERE x.kind = 'part'
-        AND ${isGivenAway(sql`coalesce(x.pay_type, s.pay_type)`, sql`x.amount_cents`)}), 0)::int
+        AND ${isGivenAway(sql`coalesce(x.pay_type, s.pay_type)`, sql`x.amount_cents`)}), 0)::float8
   FROM repair_lines x WHERE x.shop_id = s.shop_id AND x.repair_id = s.id)`;
 
 function isGivenAway(payType: SQL, chargedCents: SQL): SQL {

@@ -95,6 +95,8 @@ function toProblem(error: unknown): Problem | undefined {
   if (!(error instanceof Error)) return undefined;
   const sqlState = sqlStateOf(error);
   if (sqlState === '23505') return { ...KINDS.conflict, detail: 'There is one like this already.' };
+  if (sqlState === '22021' || sqlState === '22P05')
+    return { ...KINDS.invalid, detail: 'A text holds a NUL or half a character, which nothing here does.' };
   if (sqlState === '23503') return { ...KINDS.conflict, detail: 'Something else still refers to it.' };
   if ('status' in error && typeof error.status === 'number' && error.status >= 400 && error.status < 500) {
     return bodyProblem(error.status);

@@ -61,6 +61,7 @@ export function route<
     run: async (request, response) => {
       const params = spec.params && parseInput(spec.params, request.params, 'address');
       const query = spec.query && parseInput(spec.query, request.query, 'query');
+      if (spec.body && !spec.before) requireJson(request);
       const body = spec.body && parseInput(spec.body, request.body ?? {}, 'body');
       const answer = await handle({
         params: params as Parsed<Params>,
@@ -87,6 +88,12 @@ export function mountRoutes(router: Router, routes: readonly Route[]): void {
       (request, response) => entry.run(request, response),
     );
   }
+}
+
+/** A body of another kind was not read, and must not pass for an empty one. */
+function requireJson(request: Request): void {
+  const isSent = request.get('transfer-encoding') !== undefined || Number(request.get('content-length')) > 0;
+  if (isSent && !request.is('json')) throw new AppError('unsupported', 'Send JSON in UTF-8.');
 }
 
 function requireAccess(access: Access) {

@@ -82,11 +82,11 @@ export async function findSpent(tx: Transaction, repairIds: readonly string[]) {
     tx,
     spentRow,
     sql`SELECT r.id, r.number AS name,
-      (coalesce(sum(t.amount), 0) + coalesce(r.labor_amount_cents, sum(t.labor), 0))::int AS "totalCents",
+      (coalesce(sum(t.amount), 0) + coalesce(r.labor_amount_cents, sum(t.labor), 0))::float8 AS "totalCents",
       coalesce(json_object_agg(t.component_id, t.amount) FILTER (WHERE t.component_id IS NOT NULL), '{}') AS "partCents"
     FROM repairs r LEFT JOIN (
-      SELECT x.shop_id, x.repair_id, x.component_id, coalesce(sum(x.amount_cents), 0)::int AS amount,
-        sum(x.labor_amount_cents)::int AS labor
+      SELECT x.shop_id, x.repair_id, x.component_id, coalesce(sum(x.amount_cents), 0)::float8 AS amount,
+        sum(x.labor_amount_cents)::float8 AS labor
       FROM repair_lines x WHERE x.repair_id = ANY(${idList(repairIds)}) GROUP BY 1, 2, 3
     ) t ON t.shop_id = r.shop_id AND t.repair_id = r.id
     WHERE r.id = ANY(${idList(repairIds)}) GROUP BY r.shop_id, r.id`,

@@ -1,5 +1,6 @@
 import { sql, type SQL } from 'drizzle-orm';
 import { z } from 'zod';
+import { day } from '../../../shared/basics';
 import type { Comeback, comebackQuery } from '../../../shared/comebacks';
 import type { Transaction } from '../../db/client';
 import { ownTechnicianId } from '../../db/own-technician';
@@ -13,7 +14,7 @@ import { maySeePeople, permissionFor } from '../../http/permission';
 import { presentComeback } from './present';
 import { comebackConditions, findComebacks } from './queries';
 
-const cursorKey = z.tuple([z.iso.date(), z.uuid()]);
+const cursorKey = z.tuple([day, z.uuid()]);
 
 export function listComebacks(deps: Deps, actor: Actor, query: z.output<typeof comebackQuery>) {
   const { limit, cursor, ...filter } = query;

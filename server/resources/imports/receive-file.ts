@@ -1,7 +1,8 @@
 import type { RequestHandler } from 'express';
 import { mkdirSync } from 'node:fs';
 import { rm } from 'node:fs/promises';
-import multer from 'multer';
+import multer, { MulterError } from 'multer';
+import { invalid } from '../../http/errors';
 import { arrivalFolder } from '../../imports/spool';
 
 const LARGEST_FILE_BYTES = 1024 * 1024 * 1024;
@@ -26,5 +27,13 @@ export function receiveFile(dataDir: string): readonly RequestHandler[] {
     });
     next();
   };
-  return [form, tidy];
+  const read: RequestHandler = (request, response, next) => {
+    form(request, response, (error: unknown) => next(isMisshapen(error) ? misshapen(error) : error));
+  };
+  return [read, tidy];
 }
+
+/** What the parser says of a form that is cut off or has no boundary; faults of the disk bear a code. */
+const isMisshapen = (error: unknown): error is Error =>
+  error instanceof Error && !(error instanceof MulterError) && !('code' in error);
+const misshapen = ({ message }: Error) => invalid(`The form cannot be read: ${message}.`);

@@ -26,7 +26,7 @@ export type Upload = { path: string; originalname: string; size: number };
 type Page = { limit: number; cursor?: string | undefined };
 
 export async function listImports(deps: Deps, { shopId }: Actor, { limit, cursor }: Page) {
-  const after = decodeCursor(cursor, z.tuple([z.string().max(40), z.uuid()]));
+  const after = decodeCursor(cursor, z.tuple([z.iso.datetime(), z.uuid()]));
   const rows = await withShop(deps.database, shopId, (tx) => listImportRows(tx, limit, after));
   const page = pageOf(rows, limit, (row) => [row.createdKey, row.id]);
   return { ...page, data: page.data.map(presentImport) };

@@ -7,7 +7,7 @@ import { withShop } from '../../db/tenancy';
 import type { Deps } from '../../deps';
 import type { Actor } from '../../http/actor';
 import { audit } from '../../http/audit';
-import { AppError, type FieldError } from '../../http/errors';
+import { AppError, invalid, type FieldError } from '../../http/errors';
 import { applyStagedRepairs, REPAIR_TABLES, settleRepairs } from '../../imports/kind-repairs';
 import { dayAfter } from '../../imports/parse-date';
 import { readRemarks } from '../../imports/remarks';
@@ -27,6 +27,8 @@ import { LINE_FIELDS_OF_BATCH, pointerTo, stageBatch } from './stage-batch';
 
 const MOST_REPAIRS = 5000;
 const LONGEST_WAIT_SECONDS = 20;
+/** Far more than a repair has; what is refused is kept as it came, and writing it down must not run out of stack. */
+const DEEPEST = 20;
 
 type Rejected = BatchAnswer['rejected'];
 
@@ -43,6 +45,7 @@ export async function takeBatch(
       `A batch takes up to ${MOST_REPAIRS.toLocaleString('en-US')} repairs; this one has ${repairs.length.toLocaleString('en-US')}.`,
     );
   }
+  if (isDeeperThan(DEEPEST, repairs)) throw invalid('The repairs are nested too deeply to be any.');
   if (key === undefined) return bringIn(deps, actor, repairs, undefined);
   const { shopId } = actor;
   const fingerprint = createHash('sha256').update(JSON.stringify(repairs)).digest('hex');
@@ -174,6 +177,11 @@ async function listRejected(
   return [...byIndex]
     .sort(([a], [b]) => a - b)
     .map(([index, errors]) => ({ index, repairNumber: numberOf(repairs[index]), errors }));
+}
+
+function isDeeperThan(levels: number, value: unknown): boolean {
+  if (typeof value !== 'object' || value === null) return false;
+  return levels === 0 || Object.values(value).some((inner) => isDeeperThan(levels - 1, inner));
 }
 
 function numberOf(sent: unknown): string | null {

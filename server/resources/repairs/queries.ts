@@ -34,9 +34,9 @@ const techniciansOf = sql`(
 
 /** What the customer or maker was charged: every line, and the labor once. */
 const partsCents = sql`(SELECT coalesce(sum(x.amount_cents), 0) FROM repair_lines x
-  WHERE x.shop_id = r.shop_id AND x.repair_id = r.id AND x.kind = 'part')::int`;
+  WHERE x.shop_id = r.shop_id AND x.repair_id = r.id AND x.kind = 'part')::float8`;
 const totalCents = sql`(SELECT coalesce(sum(x.amount_cents), 0) + coalesce(r.labor_amount_cents, sum(x.labor_amount_cents), 0)
-  FROM repair_lines x WHERE x.shop_id = r.shop_id AND x.repair_id = r.id)::int`;
+  FROM repair_lines x WHERE x.shop_id = r.shop_id AND x.repair_id = r.id)::float8`;
 
 /** Of a repair that a return names, looked up only where it is needed: few returns touch a page. */
 const ofRepair = (column: 'return_id' | 'first_id', value: SQL) =>

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { day } from '../../../shared/basics';
 import type { RepairWhole, repairQuery } from '../../../shared/repairs';
 import { lastAnalysis } from '../../db/last-analysis';
 import { ownTechnicianId } from '../../db/own-technician';
@@ -13,7 +14,7 @@ import { repairConditions, type RepairFilter } from './filters';
 import { presentListed, presentRepair } from './present';
 import { findLines, findLinks, findRepair, findRepairs, findVersions } from './queries';
 
-const cursorKey = z.tuple([z.iso.date(), z.uuid()]);
+const cursorKey = z.tuple([day, z.uuid()]);
 
 export function listRepairs(deps: Deps, actor: Actor, query: z.output<typeof repairQuery>) {
   const { limit, cursor, ...filter } = query;

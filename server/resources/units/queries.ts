@@ -139,7 +139,7 @@ export function findVisits(tx: Transaction, unitId: string): Promise<UnitVisitRo
     visitRow,
     sql`SELECT r.id, r.number, r.ticket_type AS "ticketType", r.opened_on AS "openedOn", r.ready_on AS "readyOn",
       r.closed_on AS "closedOn", r.work_on AS "workOn", r.meter_hours::float8 AS "meterHours", r.complaint, r.correction,
-      (coalesce(lines.amount, 0) + coalesce(r.labor_amount_cents, lines.labor, 0))::int AS "totalCents",
+      (coalesce(lines.amount, 0) + coalesce(r.labor_amount_cents, lines.labor, 0))::float8 AS "totalCents",
       coalesce(lines.list, '[]') AS lines,
       (SELECT json_build_object('id', f.id, 'name', f.number) FROM ${effectiveComebacks} e
         JOIN repairs f ON f.shop_id = r.shop_id AND f.id = e.first_id
