@@ -66,13 +66,13 @@ export function useBrowser() {
       await page.waitForURL((url) => url.pathname !== '/sign-in');
       return page;
     },
-    /** The same without the way through the form: straight to a page, once it is whole. */
-    async at(mailbox: Mailbox, path: string, look: Look = {}): Promise<Page> {
+    /** The same without the way through the form: straight to a page, once it is whole; or to none yet. */
+    async at(mailbox: Mailbox, path: string | null, look: Look = {}): Promise<Page> {
       const page = await open(look);
       await page.request.post('/api/v1/session', {
         data: { email: `${mailbox}@millrace.example`, password: PASSWORD },
       });
-      await goTo(page, path);
+      if (path !== null) await goTo(page, path);
       return page;
     },
   };
