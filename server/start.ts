@@ -41,9 +41,9 @@ async function start(config: Config): Promise<{ end: () => Promise<void>; databa
     await requireBoundRole(database);
     const smtpUrl = config.smtpUrl ?? (await keepOutbox(config, endings));
     const sessionSecret = sessionSecretOf(config);
-    await Promise.all([recoverImports(databaseUrl), recoverAnalyses(databaseUrl), recoverMails(databaseUrl)]);
-
-    const worker = await startWorker({ databaseUrl, sessionSecret, smtpUrl }, logger);
+    const recover = () =>
+      Promise.all([recoverImports(databaseUrl), recoverAnalyses(databaseUrl), recoverMails(databaseUrl)]);
+    const worker = await startWorker({ databaseUrl, sessionSecret, smtpUrl }, logger, recover);
     endings.push(worker.stop);
     const boss = openQueues(database.$client);
     boss.on('error', (error) => logger.error({ err: error }, 'queue'));

@@ -99,6 +99,7 @@ async function rehearse(deps: Deps, job: Job): Promise<void> {
 
 const settled = (deps: Deps, outcome: Outcome) => ({
   status: 'done',
+  error: null,
   rowsRead: outcome.rowsRead,
   rowsTotal: outcome.rowsRead,
   createdCount: outcome.created,

@@ -8,10 +8,14 @@ export type WorkerHandle = { wake: (name: JobName) => void; stop: () => Promise<
 const SCRIPT = path.join(import.meta.dirname, 'worker-process.ts');
 const RESTART_AFTER_MS = 2000;
 
-/** Forks the worker, starts it again should it end by itself, and passes wake-ups on. */
+/**
+ * Forks the worker, starts it again should it end by itself, and passes wake-ups on. Before each start, what a worker that
+ * ended without order left at work is settled: nobody else would, and it would look at work for ever.
+ */
 export async function startWorker(
   opening: { databaseUrl: string; sessionSecret: string; smtpUrl: string | undefined },
   logger: Logger,
+  recover: () => Promise<unknown>,
 ): Promise<WorkerHandle> {
   let child: ChildProcess;
   let isStopping = false;
@@ -27,11 +31,15 @@ export async function startWorker(
         reject(new Error(`the worker ended (${code})`));
         if (isStopping) return;
         logger.error({ code }, 'the worker ended; it is started again');
-        setTimeout(() => {
-          if (!isStopping) start().catch((error: unknown) => logger.error({ err: error }, 'worker'));
-        }, RESTART_AFTER_MS);
+        setTimeout(() => void restart(), RESTART_AFTER_MS);
       });
     });
+  const say = (error: unknown) => logger.error({ err: error }, 'worker');
+  const restart = async (): Promise<void> => {
+    await recover().catch(say);
+    if (!isStopping) await start().catch(say);
+  };
+  await recover();
   await start();
   return {
     wake: (name) => {
