@@ -2,7 +2,7 @@ import { z } from 'zod';
 
 export const id = z.uuid();
 /** A business date in the shop's zone. */
-export const day = z.iso.date();
+export const day = z.iso.date().refine((text) => !text.startsWith('0000'), 'There is no year 0000.');
 export const instant = z.iso.datetime();
 export const cents = z.number().int();
 export const interval = z.strictObject({ lower: z.number().nullable(), upper: z.number().nullable() });
