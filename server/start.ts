@@ -6,7 +6,8 @@ import { readConfig, type Config } from './config';
 import { startCluster, type Cluster } from './db/cluster';
 import { openServiceDatabase, requireBoundRole } from './db/client';
 import { migrateDatabase } from './db/migrate';
-import { DEMO_PASSWORD, demoSignIns, loadDemoIfEmpty } from './demo/load';
+import { bringDemoIfEmpty } from './demo/bring-demo';
+import { DEMO_PASSWORD, demoSignIns } from './demo/sign-ins';
 import type { Deps } from './deps';
 import { recoverImports } from './imports/recover-imports';
 import { recoverAnalyses } from './jobs/analysis/recover';
@@ -34,7 +35,7 @@ async function start(config: Config): Promise<{ end: () => Promise<void>; databa
     if (cluster) endings.push(cluster.stop);
     const databaseUrl = config.databaseUrl ?? cluster?.databaseUrl ?? '';
     await migrateDatabase(databaseUrl);
-    await buildClientIfStale(say);
+    buildClientIfStale(say);
 
     const database = openServiceDatabase(databaseUrl);
     endings.push(() => database.$client.end());
@@ -57,7 +58,9 @@ async function start(config: Config): Promise<{ end: () => Promise<void>; databa
       jobs: createJobSender(boss, worker.wake),
       now: () => new Date(),
     };
-    if (config.demo && config.environment !== 'production') await loadDemoIfEmpty(deps, databaseUrl, say);
+    if (config.demo && config.environment !== 'production') {
+      await bringDemoIfEmpty({ databaseUrl, sessionSecret }, say);
+    }
 
     const server = createApp(deps).listen(config.port, config.host);
     await new Promise<void>((resolve, reject) => server.once('listening', resolve).once('error', reject));

@@ -67,7 +67,7 @@ async function runRound(projects: readonly string[], folder: string, filters: re
 const missing = TOOLS.filter((tool) => !existsSync(tool.file)).map((tool) => tool.debianPackage);
 if (missing.length > 0) installDebianPackages(missing, say);
 requirePostgres(say);
-await buildClientIfStale(say);
+buildClientIfStale(say);
 
 const folder = mkdtempSync(path.join(os.tmpdir(), 'witness-mark-report-'));
 const total = { passed: 0, failed: 0, skipped: 0 };

@@ -3,8 +3,7 @@ import { mkdtemp, rm, writeFile } from 'node:fs/promises';
 import os from 'node:os';
 import path from 'node:path';
 import { setTimeout as wait } from 'node:timers/promises';
-import pg from 'pg';
-import { ROLE_NAMES, type Role } from '../../shared/roles';
+import type pg from 'pg';
 import { withShop } from '../db/tenancy';
 import type { Deps } from '../deps';
 import { importFile } from '../imports/import-file';
@@ -13,77 +12,39 @@ import { BCRYPT_COST, todayIn } from '../resources/session/service';
 import { arrangeShop, decideOldComebacks, sayHowReplaced } from './arrange';
 import { toCsv } from './csv';
 import { PART_COLUMNS, REPAIR_COLUMNS, UNIT_COLUMNS } from './native-rows';
+import { DEMO_PASSWORD, DEMO_PEOPLE, DEMO_SHOP, withMigrator } from './sign-ins';
 import { simulateMillrace, type Millrace } from './simulate-millrace';
 
-export const DEMO_PASSWORD = 'witness-mark-demo';
-const SHOP_NAME = 'Millrace Small Engine';
 const TIME_ZONE = 'America/New_York';
 
-const PEOPLE: readonly { mailbox: string; name: string; role: Role }[] = [
-  { mailbox: 'owner', name: 'Ines Aldane', role: 'owner' },
-  { mailbox: 'manager', name: 'Tom Varley', role: 'service_manager' },
-  { mailbox: 'tech', name: 'Dale Kettering', role: 'technician' },
-  { mailbox: 'books', name: 'Noor Halvard', role: 'accountant' },
-  { mailbox: 'counter', name: 'Wren Castell', role: 'counter' },
-];
-const emailOf = (mailbox: string) => `${mailbox}@millrace.example`;
-
-/** Who can sign in to the demo shop; none where it is not there. */
-export async function demoSignIns(databaseUrl: string): Promise<{ email: string; role: string }[]> {
-  return withMigrator(databaseUrl, async (client) => {
-    const { rows } = await client.query('SELECT FROM shops WHERE name = $1', [SHOP_NAME]);
-    if (rows.length === 0) return [];
-    return PEOPLE.map(({ mailbox, role }) => ({ email: emailOf(mailbox), role: ROLE_NAMES[role] }));
-  });
-}
-
 /**
- * Brings the demo shop into a database that has no shop, through the same import as anybody's records, and waits
- * until its figures are there. The records end on the demo day of the settings, else today.
+ * Brings the demo shop in through the same import as anybody's records, and waits until its figures are there. The
+ * records end on the demo day of the settings, else today.
  */
-export async function loadDemoIfEmpty(
-  deps: Deps,
-  databaseUrl: string,
-  say: (line: string) => void,
-): Promise<void> {
-  const created = await withMigrator(databaseUrl, createShop);
-  if (!created) return;
-  say(`Loading the demo shop, ${SHOP_NAME}: about half a minute`);
-  const { shopId, managerId } = created;
+export async function loadDemo(deps: Deps, databaseUrl: string): Promise<void> {
+  const { shopId, managerId } = await withMigrator(databaseUrl, createShop);
   const asOf = deps.config.demoDay ?? todayIn(TIME_ZONE, deps.now());
   const shop = simulateMillrace({ asOf });
   await importRecords(deps, shopId, managerId, shop);
   await withShop(deps.database, shopId, (tx) => arrangeShop(tx, shopId, shop));
   await withShop(deps.database, shopId, (tx) => requestAnalysis(tx, deps, shopId));
-  deps.jobs.wake('analysis');
   await analysisReady(deps, shopId);
   await withShop(deps.database, shopId, (tx) => decideOldComebacks(tx, { managerId, asOf }));
 }
 
-async function withMigrator<Result>(databaseUrl: string, work: (client: pg.Client) => Promise<Result>) {
-  const client = new pg.Client({ connectionString: databaseUrl });
-  await client.connect();
-  try {
-    return await work(client);
-  } finally {
-    await client.end();
-  }
-}
-
-/** The shop and its people; nothing where there is any shop already. */
-async function createShop(client: pg.Client): Promise<{ shopId: string; managerId: string } | undefined> {
+async function createShop(client: pg.Client): Promise<{ shopId: string; managerId: string }> {
   const { rows } = await client.query<{ id: string }>(
-    `INSERT INTO shops (name, time_zone) SELECT $1, $2 WHERE NOT EXISTS (SELECT FROM shops) RETURNING id`,
-    [SHOP_NAME, TIME_ZONE],
+    `INSERT INTO shops (name, time_zone) VALUES ($1, $2) RETURNING id`,
+    [DEMO_SHOP, TIME_ZONE],
   );
-  const shopId = rows[0]?.id;
-  if (shopId === undefined) return undefined;
+  const shopId = rows[0]?.id ?? '';
   const hash = await bcrypt.hash(DEMO_PASSWORD, BCRYPT_COST);
   let managerId = '';
-  for (const { mailbox, name, role } of PEOPLE) {
+  for (const { email, name, role } of DEMO_PEOPLE) {
     const person = await client.query<{ id: string }>(
-      'INSERT INTO users (email, display_name, password_hash) VALUES ($1, $2, $3) RETURNING id',
-      [emailOf(mailbox), name, hash],
+      `INSERT INTO users (email, display_name, password_hash) VALUES ($1, $2, $3)
+       ON CONFLICT (email) DO UPDATE SET password_hash = EXCLUDED.password_hash RETURNING id`,
+      [email, name, hash],
     );
     const userId = person.rows[0]?.id ?? '';
     if (role === 'service_manager') managerId = userId;
