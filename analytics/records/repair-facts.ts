@@ -90,13 +90,21 @@ export function repairFacts(records: {
       componentIds: componentsOf(done),
       troubleComponentIds,
       fittedComponentIds: componentsOf(parts),
-      systemIds: [...new Set([...systems, ...systemsIn(repair.complaint)])],
+      systemIds: [...new Set([...systems, ...systemsIn(troubleText(repair))])],
       isNothingFound: trouble.length === 0 && lines.some(({ workDone }) => workDone === 'nothing_found'),
       isMaintenanceOnly,
       isEligible: leftOut === null,
       leftOut,
     };
   });
+}
+
+/**
+ * Many programs write a whole visit into one field: where no complaint stands by itself, the notes are read in its place,
+ * unless they tell of a service, which names every system that was looked at.
+ */
+function troubleText({ complaint, notes }: RecordRepair): string | null | undefined {
+  return complaint || (readsAsService(notes) ? null : notes);
 }
 
 function isRoutine(repair: RecordRepair, lines: readonly RecordLine[]): boolean {

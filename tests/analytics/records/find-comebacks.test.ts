@@ -81,6 +81,19 @@ describe('what is a candidate', () => {
     expect(find(work)[0]?.link).toBe('same_system');
   });
 
+  test('(b) the same system in the notes, where they are all that was written, and tell of no service', () => {
+    const written = (first: string, back: string, complaint?: string) =>
+      find({
+        repairs: [
+          repairRow('a', '2024-05-01', { notes: first }),
+          repairRow('b', '2024-06-01', { notes: back, ...(complaint ? { complaint } : {}) }),
+        ],
+      });
+    expect(written('BLADES STUCK. FREED', 'BLADES STOPPED AGAIN')).toMatchObject([{ link: 'same_system' }]);
+    expect(written('BLADES STUCK. FREED', 'ANNUAL SERVICE. OIL, BLADES')).toEqual([]);
+    expect(written('BLADES STUCK. FREED', 'BLADES STOPPED AGAIN', 'no spark')).toEqual([]);
+  });
+
   test('(c) joined by a cascade of that model, or both resultant of one cause in it', () => {
     expect(find({ ...two('fuse', 'clutch'), cascades: CASCADES })[0]?.link).toBe('cascade');
     expect(find({ ...two('switch', 'fuse'), cascades: CASCADES })[0]?.link).toBe('cascade');
