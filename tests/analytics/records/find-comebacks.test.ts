@@ -89,7 +89,10 @@ describe('what is a candidate', () => {
           repairRow('b', '2024-06-01', { notes: back, ...(complaint ? { complaint } : {}) }),
         ],
       });
-    expect(written('BLADES STUCK. FREED', 'BLADES STOPPED AGAIN')).toMatchObject([{ link: 'same_system' }]);
+    // Parts may stand there by number alone, so that the evidence must not say that there were none.
+    expect(written('BLADES STUCK. FREED', 'BLADES STOPPED AGAIN')).toMatchObject([
+      { link: 'same_system', evidence: 'No component known 1 May; no component known 1 June' },
+    ]);
     expect(written('BLADES STUCK. FREED', 'ANNUAL SERVICE. OIL, BLADES')).toEqual([]);
     expect(written('BLADES STUCK. FREED', 'BLADES STOPPED AGAIN', 'no spark')).toEqual([]);
   });
