@@ -17,6 +17,8 @@ const settings = z.object({
   SESSION_SECRET: z.string().min(32, 'at least 32 characters').optional(),
   SMTP_URL: z.string().startsWith('smtp').optional(),
   MAIL_FROM: z.string().min(3).default('Witness Mark <witness-mark@localhost>'),
+  /** Set by npm: the folder in which the person stands. */
+  INIT_CWD: z.string().optional(),
   LOG_LEVEL: z.enum(['silent', 'error', 'warn', 'info', 'debug']).default('info'),
 });
 
@@ -38,6 +40,8 @@ export type Config = {
   smtpUrl: string | undefined;
   mailFrom: string;
   logLevel: string;
+  /** What files named on the command line are relative to. */
+  calledFrom: string;
 };
 
 /**
@@ -71,5 +75,6 @@ export function readConfig(env: NodeJS.ProcessEnv = process.env): Config {
     smtpUrl: values.SMTP_URL,
     mailFrom: values.MAIL_FROM,
     logLevel: values.LOG_LEVEL,
+    calledFrom: values.INIT_CWD ?? process.cwd(),
   };
 }

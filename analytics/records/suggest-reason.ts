@@ -65,7 +65,8 @@ export function suggestReason(
     if (verbs.includes('worked on')) return say('undetermined', evidence);
     return say(isDeadEarly(first.facts, back.facts) ? 'defective_part' : 'part_failed_again', evidence);
   }
-  const names = ({ facts }: Visit) => facts.troubleComponentIds.map(nameOf).join(', ') || 'no component known';
+  const names = ({ facts }: Visit) =>
+    facts.troubleComponentIds.map(nameOf).join(', ') || 'no component known';
   return say('undetermined', `${names(first)} ${done}; ${names(back)} ${returned}`);
 }
 

@@ -10,6 +10,8 @@ export const STARTER_COMPLAINT_PHRASES: readonly { phrase: string; system: strin
     'blades will not engage',
     'blades wont turn on',
     'blades not engaging',
+    'blades do not engage',
+    'blades dont engage',
   ),
   ...phrases(
     'PTO drive',
@@ -38,6 +40,16 @@ export const STARTER_COMPLAINT_PHRASES: readonly { phrase: string; system: strin
     'wont turn over',
     'will not turn over',
     'just clicks',
+  ),
+  ...phrases(
+    'starting',
+    'wont start',
+    'will not start',
+    'does not start',
+    'doesnt start',
+    'no start',
+    'hard to start',
+    'hard start',
   ),
   ...phrases('starting', 'only clicks', 'starter', 'solenoid', 'recoil', 'pull cord', 'pull rope'),
   ...phrases(

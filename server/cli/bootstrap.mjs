@@ -45,7 +45,6 @@ if (major < 20 || (major === 20 && minor < 11)) {
 }
 bringDependencies();
 
-// Files named on the command line are meant from where the person stands, so the folder is left as it is.
 const child = spawn(
   process.execPath,
   ['--import', import.meta.resolve('tsx'), path.join(ROOT, script), ...args],

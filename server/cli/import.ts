@@ -5,6 +5,7 @@ import { parseArgs } from 'node:util';
 import { pino } from 'pino';
 import { z } from 'zod';
 import { IMPORT_KINDS, mapping as mappingSchema } from '../../shared/imports';
+import { readConfig } from '../config';
 import { openServiceDatabase } from '../db/client';
 import { AppError } from '../http/errors';
 import { importFile } from '../imports/import-file';
@@ -32,10 +33,11 @@ async function main(args: readonly string[]): Promise<number> {
   const kind = z.enum(IMPORT_KINDS).safeParse(values.kind);
   if (file === undefined || positionals.length > 1 || values.shop === undefined || !kind.success)
     throw new Error(USAGE);
+  const from = (name: string) => path.resolve(readConfig().calledFrom, name);
   const mapping =
     values.mapping === undefined
       ? undefined
-      : mappingSchema.parse(JSON.parse(await readFile(values.mapping, 'utf8')));
+      : mappingSchema.parse(JSON.parse(await readFile(from(values.mapping), 'utf8')));
 
   const { config, migratorUrl, close } = await openForCommand(sayToPerson);
   const database = openServiceDatabase(migratorUrl, 4);
@@ -50,7 +52,7 @@ async function main(args: readonly string[]): Promise<number> {
     const logger = pino({ level: config.logLevel }, pino.destination(2));
     const jobs = createJobSender(boss, () => undefined);
     const deps = { config, database, logger, jobs, now: () => new Date(), sessionSecret: '' };
-    const filePath = path.resolve(file);
+    const filePath = from(file);
     const done = await importFile(deps, {
       shopId,
       kind: kind.data,

@@ -56,6 +56,9 @@ export async function applyRepairs(
   client: pg.PoolClient,
   givenLineFields: readonly string[],
 ): Promise<Counts> {
+  await client.query(`SELECT refresh_statistics('{units,models,components,parts,technicians}')`);
+  // Small tables that foreign keys lead to would be read whole for every row.
+  await client.query('SET LOCAL enable_seqscan = off');
   const created = await client.query(`
     INSERT INTO repairs (shop_id, id, location_id, number, number_key, ${NAMES.join(', ')}, changed_by_import_id)
     SELECT ${SHOP}, s.repair_id, s.location_id, btrim(s.repair_number), s.number_key, ${VALUES.map(([, fresh]) => fresh).join(', ')}, ${IMPORT}
@@ -64,6 +67,7 @@ export async function applyRepairs(
     INSERT INTO import_changes (shop_id, import_id, table_name, row_id)
     SELECT ${SHOP}, ${IMPORT}, 'repairs', repair_id FROM targets WHERE NOT is_known`);
   await insertNewLines(client);
+  await client.query('SET LOCAL enable_seqscan = on');
   const known = await client.query('SELECT FROM targets WHERE is_known');
   const updated = (known.rowCount ?? 0) === 0 ? 0 : await updateKnown(client, givenLineFields);
   return { created: created.rowCount ?? 0, updated, unchanged: (known.rowCount ?? 0) - updated };

@@ -1,6 +1,5 @@
-import { mkdtempSync, rmSync } from 'node:fs';
+import { rmSync } from 'node:fs';
 import { writeFile } from 'node:fs/promises';
-import os from 'node:os';
 import path from 'node:path';
 import pg from 'pg';
 import { pino } from 'pino';
@@ -10,6 +9,7 @@ import { startCluster } from '../../server/db/cluster';
 import { migrateDatabase } from '../../server/db/migrate';
 import { importFile } from '../../server/imports/import-file';
 import { takeBatch } from '../../server/resources/repairs-batch/service';
+import { scratchFolder } from '../scratch-folder';
 
 const REPAIRS = Number(process.argv[2] ?? 25_000);
 const HEADER =
@@ -63,7 +63,7 @@ async function measure<Result>(what: string, rows: number, work: () => Promise<R
   return result;
 }
 
-const dataDir = mkdtempSync(path.join(os.tmpdir(), 'witness-mark-bench-'));
+const dataDir = scratchFolder('bench');
 const cluster = await startCluster({ dataDir, say: () => undefined });
 try {
   await migrateDatabase(cluster.databaseUrl);

@@ -1,10 +1,10 @@
 import { spawn, spawnSync, type ChildProcess } from 'node:child_process';
-import { mkdtempSync, readFileSync, readdirSync, rmSync } from 'node:fs';
-import os from 'node:os';
+import { readFileSync, readdirSync, rmSync } from 'node:fs';
 import path from 'node:path';
 import { setTimeout as wait } from 'node:timers/promises';
 import type { Measure } from './measure';
 import { unseenShop, type UnseenShop } from './unseen-shop';
+import { scratchFolder } from '../scratch-folder';
 
 const ROOT = path.resolve(import.meta.dirname, '../..');
 const PORT = 4655;
@@ -16,7 +16,7 @@ const ADDRESS = `http://127.0.0.1:${PORT}`;
  * was planted.
  */
 export async function benchWholeWay(): Promise<Measure[]> {
-  const dataDir = mkdtempSync(path.join(os.tmpdir(), 'witness-mark-bench-'));
+  const dataDir = scratchFolder('bench');
   const env = { ...process.env, PORT: String(PORT), DATA_DIR: dataDir, DEMO: '0', LOG_LEVEL: 'error' };
   const server = spawn(process.execPath, ['--import', 'tsx', 'server/start.ts'], {
     cwd: ROOT,

@@ -1,9 +1,9 @@
 import { spawn } from 'node:child_process';
-import { mkdtempSync, rmSync } from 'node:fs';
+import { rmSync } from 'node:fs';
 import { createServer } from 'node:net';
-import os from 'node:os';
 import path from 'node:path';
 import type { TestProject } from 'vitest/node';
+import { scratchFolder } from '../scratch-folder';
 
 declare module 'vitest' {
   export interface ProvidedContext {
@@ -17,7 +17,7 @@ const DEMO_DAY = '2026-06-30';
 
 /** The application as `npm start` brings it up, in a data folder of its own, stopped as Ctrl-C would. */
 export default async function setup(project: TestProject) {
-  const dataDir = mkdtempSync(path.join(os.tmpdir(), 'witness-mark-e2e-'));
+  const dataDir = scratchFolder('e2e');
   const port = await freePort();
   const server = spawn(process.execPath, ['--import', 'tsx', 'server/start.ts'], {
     cwd: ROOT,

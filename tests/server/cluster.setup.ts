@@ -1,9 +1,8 @@
-import { mkdtempSync, rmSync } from 'node:fs';
-import os from 'node:os';
-import path from 'node:path';
+import { rmSync } from 'node:fs';
 import type { TestProject } from 'vitest/node';
 import { startCluster } from '../../server/db/cluster';
 import { migrateDatabase } from '../../server/db/migrate';
+import { scratchFolder } from '../scratch-folder';
 
 declare module 'vitest' {
   export interface ProvidedContext {
@@ -14,7 +13,7 @@ declare module 'vitest' {
 
 /** One cluster of its own for a run of tests, on a free port, gone afterwards. */
 export default async function setup(project: TestProject) {
-  const dataDir = mkdtempSync(path.join(os.tmpdir(), 'witness-mark-test-'));
+  const dataDir = scratchFolder('test');
   const cluster = await startCluster({ dataDir, say: () => undefined, isThrowaway: true });
   await migrateDatabase(cluster.databaseUrl);
   project.provide('templateUrl', cluster.databaseUrl);

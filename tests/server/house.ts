@@ -1,7 +1,5 @@
 import { randomBytes, randomUUID } from 'node:crypto';
-import { mkdtempSync, rmSync } from 'node:fs';
-import os from 'node:os';
-import path from 'node:path';
+import { rmSync } from 'node:fs';
 import bcrypt from 'bcrypt';
 import pg from 'pg';
 import { pino } from 'pino';
@@ -18,6 +16,7 @@ import { startWorkers } from '../../server/jobs/workers';
 import { startOutboxServer } from '../../server/mail/outbox-server';
 import type { KeyScope, Role } from '../../shared/roles';
 import { ROLES } from '../../shared/roles';
+import { scratchFolder } from '../scratch-folder';
 
 const PASSWORD = 'a long enough password';
 
@@ -30,7 +29,7 @@ export async function openHouse() {
     `CREATE DATABASE ${name} TEMPLATE ${new URL(templateUrl).pathname.slice(1)}`,
   );
   const migratorUrl = withDatabase(templateUrl, name);
-  const dataDir = mkdtempSync(path.join(os.tmpdir(), 'witness-mark-house-'));
+  const dataDir = scratchFolder('house');
   const migrator = new pg.Pool({ connectionString: migratorUrl, max: 2 });
   const database = openServiceDatabase(migratorUrl);
   const outbox = await startOutboxServer(dataDir);

@@ -1,12 +1,12 @@
-import { mkdtempSync, rmSync } from 'node:fs';
+import { rmSync } from 'node:fs';
 import { readFile } from 'node:fs/promises';
 import { createServer, type Server } from 'node:net';
-import os from 'node:os';
 import path from 'node:path';
 import { SMTPServer, type SMTPServerOptions } from 'smtp-server';
 import { afterEach, describe, expect, it } from 'vitest';
 import { createMailer } from '../../server/mail/mailer';
 import { startOutboxServer } from '../../server/mail/outbox-server';
+import { scratchFolder } from '../scratch-folder';
 
 const endings: (() => Promise<void> | void)[] = [];
 afterEach(async () => {
@@ -42,7 +42,7 @@ async function startServer(options: SMTPServerOptions): Promise<string> {
 
 describe('the outbox', () => {
   it('takes mail over SMTP and keeps each message as it came, in a file that mail programs open', async () => {
-    const dataDir = mkdtempSync(path.join(os.tmpdir(), 'witness-mark-outbox-'));
+    const dataDir = scratchFolder('outbox');
     endings.push(() => rmSync(dataDir, { recursive: true, force: true }));
     const outbox = await startOutboxServer(dataDir);
     endings.push(outbox.stop);

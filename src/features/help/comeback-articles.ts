@@ -6,7 +6,7 @@ export const comebackArticles: readonly HelpArticle[] = [
     title: 'Came back',
     body: [
       'Of the repairs whose work was done in a month, the share whose machine returned for the same trouble within the shop’s window of days (Settings; 90 unless you changed it). A return belongs to the month, the model and the technician of the first repair, not of the second.',
-      'The same trouble means: the same component again, or the same system in complaint, work or lines, or two components that a cascade of that model joins. A yearly service or a set-up is not a return; a service visit whose complaint tells of a trouble is looked at all the same.',
+      'The same trouble means: the same component again, or the same system in complaint, work or lines, or two components that a cascade of that model joins. Where a ticket has no complaint, its notes are read in its place. A yearly service or a set-up is not a return; a service visit whose complaint tells of a trouble is looked at all the same.',
       'Only repairs that could come back are counted: the machine is identified, the ticket is a repair, and it was not a service alone. The page says how many repairs were left out because nobody can tell which machine they were.',
       'Two shares stand on the same count of repairs: came back with the same trouble (what the customer counts), and confirmed as ours. Returns that a person called unrelated, or that follow work which the customer declined, are in neither.',
       'The interval says which true rates are compatible with so many of so few: 2 of 40 is 5 %, and could as well be 1 or 16 %.',
