@@ -43,7 +43,7 @@ export function CaseFiles({ caseFiles, formats }: Props) {
                 <Link
                   key={repair.id}
                   to={paths.repair(repair.id)}
-                  className="inline-flex min-h-6 items-center"
+                  className="inline-flex min-h-11 min-w-6 items-center desk:min-h-6"
                 >
                   {repair.name}
                 </Link>
