@@ -125,6 +125,9 @@ const compareFindings = (x: CascadeFinding, y: CascadeFinding) =>
   byText(x.causal, y.causal) ||
   byText(x.resultant, y.resultant);
 
+/** Without a direction there is only the excess to go by: the pair's own limits must lie above one. */
+const isExcess = ({ excessRatioLimits: { lower } }: CascadeFinding) => lower !== null && lower > 1;
+
 /**
  * Which component, left in, takes which other with it: a causal part told apart from the parts that it breaks, and
  * both from parts that wear out at one age or are changed together.
@@ -189,13 +192,23 @@ export function findCascades(visits: readonly CascadeVisit[], options: CascadeOp
     searchedPairs: { names: names.searched, entries: pairCounts.searchedPairs },
   });
   const selected = selectFindings(pooled, pairCounts.declaredPairs, maxFalseDiscovery);
+  const kept = new Set<unknown>();
   const findings = selected.flatMap((one) => {
     const { model: at } = one.judged.pair;
     const model = examined.models[at];
     if (!model) return [];
     const list = one.declared ? pooled.declared : pooled.searched;
     const borrowedFrom = lenders(one, list, histories);
-    return [toFinding(one, { model, names: components, windowDays, family: familyAt(at), borrowedFrom })];
+    const finding = toFinding(one, {
+      model,
+      names: components,
+      windowDays,
+      family: familyAt(at),
+      borrowedFrom,
+    });
+    if (finding.kind === 'together' && !isExcess(finding)) return [];
+    kept.add(one.judged);
+    return [finding];
   });
 
   const all = histories.linesKnown + histories.linesUnknown;
@@ -213,13 +226,7 @@ export function findCascades(visits: readonly CascadeVisit[], options: CascadeOp
   };
   return {
     findings: findings.sort(compareFindings),
-    caseFiles: caseFilesOf(
-      examined,
-      components,
-      windowDays,
-      [...pooled.declared, ...pooled.searched],
-      new Set(selected.map(({ judged }) => judged)),
-    ),
+    caseFiles: caseFilesOf(examined, components, windowDays, [...pooled.declared, ...pooled.searched], kept),
     examined: counts,
     warnings: [...warnings].sort(byText),
   };
